@@ -1,0 +1,82 @@
+import type { LimitStateName } from "../study/study.ts";
+
+/** One Float64Array per slot; the first n entries are valid. */
+export type Columns = readonly Float64Array[];
+export type Slot = number;
+
+/**
+ * A line of the calculation sheet: value = columns[slot][0] after a run with n = 1.
+ *
+ * `formula` is a template: `{Ka}·{σ}` prints as `Ka·σ′v` with symbols and as `0.283·54.0` with the numbers put in;
+ * `of` ties each name in braces to its slot.
+ */
+export interface Step {
+  readonly heading: string;
+  readonly slot: Slot;
+  readonly symbol: string;
+  readonly text: string;
+  readonly formula: string;
+  readonly of: Readonly<Record<string, Slot>>;
+  readonly unit: string;
+  /** Factor from the column's unit to the printed one (radians to degrees); 1 where absent. */
+  readonly scale?: number;
+  readonly source?: string;
+}
+
+/** The one formula y = value(x), x an input. May be tabulated where x hangs on a single unknown; a test bounds every table. */
+export interface Coefficient {
+  readonly name: string;
+  readonly from: Slot;
+  readonly into: Slot;
+  /** x in the units of the column `from` (radians for angles). */
+  readonly value: (x: number) => number;
+  /** Values of x, in the column's units, where the formula is not smooth. */
+  readonly kinks: readonly number[];
+}
+
+/** One page of formulas over a block: thrust of layer i, uplift, base, bearing. */
+export interface Stage {
+  readonly name: string;
+  readonly reads: readonly Slot[];
+  readonly writes: readonly Slot[];
+  run(columns: Columns, count: number): void;
+}
+
+export interface KernelInput {
+  readonly path: string;
+  readonly slot: Slot;
+  /** Physical range in the study's unit (degrees for angles); a sample outside is taken at the limit and marked. */
+  readonly lowest: number;
+  readonly highest: number;
+  /** column value = scale · value in the study's unit (π/180 for angles, else 1). */
+  readonly scale: number;
+  /** In the study's unit; present where the quantity is certain: the column is filled once. */
+  readonly fixed?: number;
+}
+
+export interface LimitStateSlots {
+  readonly limitState: LimitStateName;
+  readonly factor: Slot;
+  readonly resisting: Slot;
+  readonly driving: Slot;
+  readonly unit: string;
+}
+
+export interface Kernel {
+  readonly slots: number;
+  readonly names: readonly string[];
+  readonly inputs: readonly KernelInput[];
+  readonly coefficients: readonly Coefficient[];
+  /** In order: a test checks that each reads only what is written before. */
+  readonly stages: readonly Stage[];
+  readonly limitStates: readonly LimitStateSlots[];
+  /** Bits of `Mark`, one number per sample; cleared by the caller before the stages run. */
+  readonly marks: Slot;
+  readonly steps: readonly Step[];
+}
+
+/** Bits that a stage or the caller sets beside a sample; they are counted and shown, never hidden. */
+export const mark = { slopeUnstable: 1, lostContact: 2, capped: 4, outOfRange: 8 } as const;
+
+/** Every factor of safety lies between 0 and this. */
+export const factorCap = 1e3;
