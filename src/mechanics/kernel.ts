@@ -18,8 +18,6 @@ export interface Step {
   readonly formula: string;
   readonly of: Readonly<Record<string, Slot>>;
   readonly unit: string;
-  /** Factor from the column's unit to the printed one (radians to degrees); 1 where absent. */
-  readonly scale?: number;
   readonly source?: string;
 }
 
@@ -62,17 +60,55 @@ export interface LimitStateSlots {
   readonly unit: string;
 }
 
+/**
+ * A row of the list of forces. Points of application are moments over forces: x = momentX / vertical, z = momentZ /
+ * (horizontal, or vertical for a weight, whose momentZ is weight times height).
+ */
+export interface ForceSlots {
+  readonly name: string;
+  readonly group: "weight" | "earth" | "water" | "surcharge" | "inertia" | "front";
+  readonly horizontal?: Slot;
+  readonly vertical?: Slot;
+  readonly momentX?: Slot;
+  readonly momentZ?: Slot;
+  /** x where there is no vertical part to take it from, z where there is no momentZ. */
+  readonly x?: Slot;
+  readonly z?: Slot;
+}
+
+/** One stretch of the pressure diagram, linear in vertical stress between two levels of one soil. */
+export interface PressurePart {
+  readonly soil: string;
+  readonly top: Slot;
+  readonly bottom: Slot;
+  readonly stressTop: Slot;
+  readonly stressBottom: Slot;
+  /** Earth pressure, horizontal part in kPa, of a vertical stress at this place; cut at zero. */
+  pressure(columns: Columns, verticalStress: number): number;
+}
+
 export interface Kernel {
   readonly slots: number;
   readonly names: readonly string[];
   readonly inputs: readonly KernelInput[];
+  /** Slots that hold the same value in every sample: certain inputs and all that follows from them alone. */
+  readonly constants: readonly { readonly slot: Slot; readonly value: number }[];
   readonly coefficients: readonly Coefficient[];
-  /** In order: a test checks that each reads only what is written before. */
+  /** What varies, in order: a test checks that each reads only what is written before. */
   readonly stages: readonly Stage[];
   readonly limitStates: readonly LimitStateSlots[];
-  /** Bits of `Mark`, one number per sample; cleared by the caller before the stages run. */
+  /** Bits of `mark`, one number per sample; starts from `constantMarks`. */
   readonly marks: Slot;
+  readonly constantMarks: number;
   readonly steps: readonly Step[];
+  /** Slots that hold angles in radians: the sheet prints them in degrees. */
+  readonly angles: readonly Slot[];
+  readonly forces: readonly ForceSlots[];
+  readonly pressure: readonly PressurePart[];
+  /** Slots by name that reading out a result needs (base width, resultant, …). */
+  readonly places: Readonly<Record<string, Slot>>;
+  /** Formulas of the surface loads' pressure on the plane at a depth below its top, kPa, horizontal. */
+  readonly loadPressure: readonly ((columns: Columns, depth: number) => number)[];
 }
 
 /** Bits that a stage or the caller sets beside a sample; they are counted and shown, never hidden. */
@@ -80,3 +116,6 @@ export const mark = { slopeUnstable: 1, lostContact: 2, capped: 4, outOfRange: 8
 
 /** Every factor of safety lies between 0 and this. */
 export const factorCap = 1e3;
+
+/** Unit weight of water, kN/m³. */
+export const waterUnitWeight = 9.81;

@@ -21,6 +21,12 @@ export interface LimitStates {
    * Allocates nothing. A gradient is one exact call with dimension + 1 points.
    */
   evaluate(z: Columns, n: number, factors: Columns, marks: Uint8Array, exact: boolean): void;
+  /**
+   * The same at physical values, exactly: for the methods that step in x (means ± one standard deviation, fractiles).
+   *
+   * @param x one column per unknown of the joint space, in its order and in the study's units (degrees for angles)
+   */
+  evaluateAt(x: Columns, n: number, factors: Columns, marks: Uint8Array): void;
   /** The only place where evaluations are counted. */
   readonly evaluations: { exact: number; batched: number };
 }

@@ -1,0 +1,248 @@
+import type {
+  Coefficient,
+  Columns,
+  ForceSlots,
+  Kernel,
+  KernelInput,
+  LimitStateSlots,
+  PressurePart,
+  Slot,
+  Stage,
+  Step,
+} from "./kernel.ts";
+
+/** A numeric field of the study as the kernel sees it; units of the study (degrees for angles). */
+export interface InputField {
+  readonly path: string;
+  readonly lowest: number;
+  readonly highest: number;
+  readonly angle: boolean;
+  /** Present where the quantity is certain. */
+  readonly fixed?: number;
+  readonly mean: number;
+}
+
+type Formula = (...values: number[]) => number;
+
+/**
+ * Puts a kernel together, one stage after the other, and folds away what does not vary: a stage that reads constants alone is
+ * run once, here, and its results become constants; a formula of a single input becomes a coefficient, which the sampler
+ * may tabulate.
+ */
+export class KernelBuilder {
+  readonly marks: Slot;
+  readonly #fields: ReadonlyMap<string, InputField>;
+  readonly #names: string[] = [];
+  readonly #inputs: KernelInput[] = [];
+  readonly #inputSlots = new Map<string, Slot>();
+  readonly #varyingInputs = new Set<Slot>();
+  readonly #constants = new Map<Slot, number>();
+  readonly #coefficients: Coefficient[] = [];
+  readonly #stages: Stage[] = [];
+  readonly #shared = new Map<string, Slot>();
+  readonly #angles = new Set<Slot>();
+  #constantMarks = 0;
+  readonly steps: Step[] = [];
+  readonly forces: ForceSlots[] = [];
+  readonly pressure: PressurePart[] = [];
+  readonly limitStates: LimitStateSlots[] = [];
+  readonly places: Record<string, Slot> = {};
+  readonly loadPressure: ((columns: Columns, depth: number) => number)[] = [];
+
+  constructor(fields: readonly InputField[]) {
+    this.#fields = new Map(fields.map((field) => [field.path, field]));
+    this.marks = this.slot("marks");
+  }
+
+  slot(name: string): Slot {
+    return this.#names.push(name) - 1;
+  }
+
+  /** A slot that holds the same number in every sample. */
+  constant(value: number, name: string = String(value)): Slot {
+    const key = `constant:${value}`;
+    const known = this.#shared.get(key);
+    if (known !== undefined) return known;
+    const slot = this.slot(name);
+    this.#constants.set(slot, value);
+    this.#shared.set(key, slot);
+    return slot;
+  }
+
+  /** The column of a field of the study; asked for twice, it is the same column. */
+  input(path: string): Slot {
+    const known = this.#inputSlots.get(path);
+    if (known !== undefined) return known;
+    const field = this.#field(path);
+    const slot = this.slot(path);
+    const scale = field.angle ? Math.PI / 180 : 1;
+    const { lowest, highest, fixed } = field;
+    this.#inputs.push({ path, slot, lowest, highest, scale, ...(fixed === undefined ? {} : { fixed }) });
+    if (fixed === undefined) this.#varyingInputs.add(slot);
+    else this.#constants.set(slot, fixed * scale);
+    if (field.angle) this.#angles.add(slot);
+    this.#inputSlots.set(path, slot);
+    return slot;
+  }
+
+  /** Marks a slot as an angle in radians, which the sheet prints in degrees. */
+  asAngle(slot: Slot): Slot {
+    this.#angles.add(slot);
+    return slot;
+  }
+
+  /** Whether the study gives this field, if only by default. */
+  has(path: string): boolean {
+    return this.#fields.has(path);
+  }
+
+  /** True where the field is certain and equal to the value: what is certainly absent costs nothing. */
+  isCertainly(path: string, value: number): boolean {
+    return this.#field(path).fixed === value;
+  }
+
+  meanOf(path: string): number {
+    return this.#field(path).mean;
+  }
+
+  /** The value of a slot that never varies. */
+  constantOf(slot: Slot): number | undefined {
+    return this.#constants.get(slot);
+  }
+
+  stage(stage: Stage): void {
+    if (stage.reads.some((slot) => !this.#constants.has(slot))) {
+      this.#stages.push(stage);
+      return;
+    }
+    const columns = this.#names.map((_, slot) => Float64Array.of(this.#constants.get(slot) ?? 0));
+    columns[this.marks][0] = this.#constantMarks;
+    stage.run(columns, 1);
+    for (const slot of stage.writes) if (slot !== this.marks) this.#constants.set(slot, columns[slot][0]);
+    this.#constantMarks = columns[this.marks][0];
+  }
+
+  /**
+   * y = formula(slots): a constant where nothing varies, a coefficient where only one input does, a stage elsewhere.
+   *
+   * @param kinks values of each argument at which the formula is not smooth, given the others
+   */
+  formula(
+    name: string,
+    formula: Formula,
+    slots: readonly Slot[],
+    kinks: (varying: number) => readonly number[] = () => [],
+  ): Slot {
+    const key = `formula:${name}:${slots.join(",")}`;
+    const known = this.#shared.get(key);
+    if (known !== undefined) return known;
+    const into = this.slot(name);
+    this.#shared.set(key, into);
+    const values = slots.map((slot) => this.#constants.get(slot));
+    const varying = [...new Set(slots.filter((_, place) => values[place] === undefined))];
+    if (varying.length === 1 && this.#varyingInputs.has(varying[0])) {
+      const places = slots.flatMap((slot, place) => (slot === varying[0] ? [place] : []));
+      const filled = values.map((value) => value ?? 0);
+      const value = (x: number): number => {
+        for (const place of places) filled[place] = x;
+        return formula(...filled);
+      };
+      this.#coefficients.push({ name, from: varying[0], into, value, kinks: kinks(places[0]) });
+      return into;
+    }
+    this.stage(formulaStage(name, formula, slots, into));
+    return into;
+  }
+
+  /** The sum of columns with signs, what is constant summed beforehand. */
+  sum(name: string, terms: readonly { readonly slot: Slot; readonly sign?: 1 | -1 }[]): Slot {
+    const into = this.slot(name);
+    let constant = 0;
+    const varying: { readonly slot: Slot; readonly sign: 1 | -1 }[] = [];
+    for (const { slot, sign = 1 } of terms) {
+      const value = this.#constants.get(slot);
+      if (value === undefined) varying.push({ slot, sign });
+      else constant += sign * value;
+    }
+    if (varying.length === 0) this.#constants.set(into, constant);
+    else this.stage(sumStage(name, varying, constant, into));
+    return into;
+  }
+
+  step(
+    heading: string,
+    slot: Slot,
+    symbol: string,
+    text: string,
+    formula: string,
+    of: Record<string, Slot>,
+    unit: string,
+    source?: string,
+  ): void {
+    this.steps.push({ heading, slot, symbol, text, formula, of, unit, ...(source === undefined ? {} : { source }) });
+  }
+
+  build(): Kernel {
+    return {
+      slots: this.#names.length,
+      names: this.#names,
+      inputs: this.#inputs,
+      constants: [...this.#constants].map(([slot, value]) => ({ slot, value })),
+      coefficients: this.#coefficients,
+      stages: this.#stages,
+      limitStates: this.limitStates,
+      marks: this.marks,
+      constantMarks: this.#constantMarks,
+      steps: this.steps,
+      angles: [...this.#angles],
+      forces: this.forces,
+      pressure: this.pressure,
+      places: this.places,
+      loadPressure: this.loadPressure,
+    };
+  }
+
+  #field(path: string): InputField {
+    const field = this.#fields.get(path);
+    if (field === undefined) throw new RangeError(`the study has no numeric field ${path}`);
+    return field;
+  }
+}
+
+/** One loop over a formula of one to seven columns; spelled out by number of columns, so that nothing is allocated per sample. */
+function formulaStage(name: string, formula: Formula, slots: readonly Slot[], into: Slot): Stage {
+  const at = (place: number): Slot => slots[Math.min(place, slots.length - 1)];
+  if (slots.length > 7) throw new RangeError(`${name}: a formula takes at most 7 columns, not ${slots.length}`);
+  return {
+    name,
+    reads: slots,
+    writes: [into],
+    run(c, count) {
+      const out = c[into];
+      const [p0, p1, p2, p3, p4, p5, p6] = [c[at(0)], c[at(1)], c[at(2)], c[at(3)], c[at(4)], c[at(5)], c[at(6)]];
+      for (let i = 0; i < count; i++) out[i] = formula(p0[i], p1[i], p2[i], p3[i], p4[i], p5[i], p6[i]);
+    },
+  };
+}
+
+function sumStage(
+  name: string,
+  terms: readonly { readonly slot: Slot; readonly sign: 1 | -1 }[],
+  constant: number,
+  into: Slot,
+): Stage {
+  return {
+    name,
+    reads: terms.map((term) => term.slot),
+    writes: [into],
+    run(c, count) {
+      const out = c[into];
+      for (let i = 0; i < count; i++) out[i] = constant;
+      for (let t = 0; t < terms.length; t++) {
+        const column = c[terms[t].slot];
+        if (terms[t].sign === 1) for (let i = 0; i < count; i++) out[i] += column[i];
+        else for (let i = 0; i < count; i++) out[i] -= column[i];
+      }
+    },
+  };
+}

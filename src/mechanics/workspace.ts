@@ -1,0 +1,63 @@
+import type { Columns, Kernel, Slot, Stage } from "./kernel.ts";
+
+/** A kernel with columns of its own: made once, run as often as wanted, allocating nothing. */
+export interface Workspace {
+  readonly kernel: Kernel;
+  readonly columns: Columns;
+  readonly capacity: number;
+  /** Runs the coefficients' formulas and the stages on the first `count` entries of the input columns. */
+  run(count: number): void;
+  /** The same without the coefficients, for a caller that has filled them from tables. */
+  runStages(count: number): void;
+}
+
+/**
+ * @param capacity largest count of one run
+ * @param wanted slots to compute; stages that none of them needs are left out. All where absent.
+ */
+export function createWorkspace(kernel: Kernel, capacity: number, wanted?: readonly Slot[]): Workspace {
+  const stages = wanted === undefined ? kernel.stages : neededStages(kernel, wanted);
+  const needed = new Set(stages.flatMap((stage) => stage.reads).concat(wanted ?? []));
+  const coefficients =
+    wanted === undefined
+      ? kernel.coefficients
+      : kernel.coefficients.filter((coefficient) => needed.has(coefficient.into));
+  const columns = Array.from({ length: kernel.slots }, () => new Float64Array(capacity));
+  for (const { slot, value } of kernel.constants) columns[slot].fill(value);
+  const marks = columns[kernel.marks];
+  const runStages = (count: number): void => {
+    marks.fill(kernel.constantMarks, 0, count);
+    for (let s = 0; s < stages.length; s++) stages[s].run(columns, count);
+  };
+  return {
+    kernel,
+    columns,
+    capacity,
+    runStages,
+    run(count) {
+      for (let k = 0; k < coefficients.length; k++) {
+        const { value } = coefficients[k];
+        const [from, into] = [columns[coefficients[k].from], columns[coefficients[k].into]];
+        for (let i = 0; i < count; i++) into[i] = value(from[i]);
+      }
+      runStages(count);
+    },
+  };
+}
+
+/** Stages that the wanted slots rest on, found from the last to the first; the marks always count. */
+export function neededStages(kernel: Kernel, wanted: readonly Slot[]): readonly Stage[] {
+  const needed = new Set([...wanted, kernel.marks]);
+  const kept: Stage[] = [];
+  for (const stage of [...kernel.stages].reverse()) {
+    if (!stage.writes.some((slot) => needed.has(slot))) continue;
+    for (const slot of stage.reads) needed.add(slot);
+    kept.push(stage);
+  }
+  return kept.reverse();
+}
+
+/** Slots of the factors of safety: what sampling wants. */
+export function factorSlots(kernel: Kernel): readonly Slot[] {
+  return kernel.limitStates.map((state) => state.factor);
+}
