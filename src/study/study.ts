@@ -51,7 +51,12 @@ export interface UncertainQuantity {
   /** What `scatter` said, for the report and for investigations. */
   readonly scatter?: Scatter;
   /** A range in the engineer's words, where the spread came from one. */
-  readonly range?: { readonly lowest: number; readonly likely: number; readonly highest: number; readonly widthInSd: number };
+  readonly range?: {
+    readonly lowest: number;
+    readonly likely: number;
+    readonly highest: number;
+    readonly widthInSd: number;
+  };
 }
 
 export interface Scatter {
@@ -70,7 +75,13 @@ export interface Scatter {
 export type Distribution =
   | { readonly kind: "normal"; readonly mean: number; readonly sd: number }
   | { readonly kind: "lognormal"; readonly mean: number; readonly sd: number; readonly shift: number }
-  | { readonly kind: "truncated_normal"; readonly mean: number; readonly sd: number; readonly from: number; readonly to: number }
+  | {
+      readonly kind: "truncated_normal";
+      readonly mean: number;
+      readonly sd: number;
+      readonly from: number;
+      readonly to: number;
+    }
   | { readonly kind: "uniform"; readonly from: number; readonly to: number }
   | { readonly kind: "triangular"; readonly from: number; readonly peak: number; readonly to: number }
   | { readonly kind: "beta"; readonly from: number; readonly to: number; readonly mean: number; readonly sd: number }
@@ -79,10 +90,20 @@ export type Distribution =
   | { readonly kind: "gamma"; readonly mean: number; readonly sd: number }
   | { readonly kind: "mixture"; readonly parts: readonly { readonly share: number; readonly of: Distribution }[] }
   /** varianceReduction: the Γ² that replaces the 1 in s²(1 + 1/n); 1 without averaging. */
-  | { readonly kind: "measured"; readonly values: readonly number[]; readonly as: "normal" | "lognormal"; readonly varianceReduction: number };
+  | {
+      readonly kind: "measured";
+      readonly values: readonly number[];
+      readonly as: "normal" | "lognormal";
+      readonly varianceReduction: number;
+    };
 
 export interface Wall {
-  readonly stem: { readonly height: Quantity; readonly crestWidth: Quantity; readonly footWidth: Quantity; readonly backRun: Quantity };
+  readonly stem: {
+    readonly height: Quantity;
+    readonly crestWidth: Quantity;
+    readonly footWidth: Quantity;
+    readonly backRun: Quantity;
+  };
   readonly base?: { readonly toe: Quantity; readonly heel: Quantity; readonly thickness: Quantity };
   readonly shearKey?: { readonly depth: Quantity; readonly width: Quantity; readonly fromToe: Quantity };
   readonly unitWeight: Quantity;
@@ -133,7 +154,12 @@ export interface Water {
 
 export interface Loads {
   readonly surcharge?: { readonly pressure: Quantity; readonly onHeel: boolean };
-  readonly strips: readonly { readonly pressure: Quantity; readonly from: Quantity; readonly width: Quantity; readonly onHeel: boolean }[];
+  readonly strips: readonly {
+    readonly pressure: Quantity;
+    readonly from: Quantity;
+    readonly width: Quantity;
+    readonly onHeel: boolean;
+  }[];
   readonly lines: readonly { readonly force: Quantity; readonly at: Quantity; readonly onHeel: boolean }[];
   readonly earthquake?: { readonly kh: Quantity; readonly kv: Quantity };
 }
@@ -180,7 +206,13 @@ export interface Target {
 }
 
 export type Evidence =
-  | { readonly kind: "results"; readonly of: string; readonly results: readonly number[]; readonly error?: number; readonly transformation?: number }
+  | {
+      readonly kind: "results";
+      readonly of: string;
+      readonly results: readonly number[];
+      readonly error?: number;
+      readonly transformation?: number;
+    }
   | { readonly kind: "survived"; readonly under: Readonly<Record<string, Quantity>> };
 
 export interface Decision {
@@ -202,5 +234,10 @@ export interface Option {
 export interface Investigation {
   readonly name: string;
   readonly cost?: number;
-  readonly informs: readonly { readonly path: string; readonly tests: number; readonly error?: number; readonly transformation?: number }[];
+  readonly informs: readonly {
+    readonly path: string;
+    readonly tests: number;
+    readonly error?: number;
+    readonly transformation?: number;
+  }[];
 }

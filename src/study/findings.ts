@@ -1,0 +1,52 @@
+/** What reading a study turns up, collected on the way so that everything wrong is reported at once. */
+import type { Problem } from "../errors.ts";
+import type { Notice } from "./study.ts";
+
+export interface Place {
+  readonly line: number;
+  readonly column: number;
+}
+
+/** Where in the text the key or the value at a path stands; undefined: not in the text; null: it was set from outside. */
+export type Places = (path: string, part: "key" | "value") => Place | undefined | null;
+
+export interface Findings {
+  readonly problems: Problem[];
+  readonly notices: Notice[];
+  /** Placed at the value, or at the nearest parent's key where the path is not in the file. */
+  problem(path: string, message: string, hint?: string): void;
+  /** Placed at the key itself. */
+  keyProblem(path: string, message: string, hint?: string): void;
+  notice(path: string, message: string): void;
+}
+
+export function collectFindings(places: Places): Findings {
+  const problems: Problem[] = [];
+  const notices: Notice[] = [];
+  const add = (path: string, part: "key" | "value", message: string, hint?: string): void => {
+    const at = placeOf(path, part, places);
+    if (problems.some((one) => one.path === path && one.message === message)) return;
+    problems.push({ path, ...(at && { at }), message, ...(hint !== undefined && { hint }) });
+  };
+  return {
+    problems,
+    notices,
+    problem: (path, message, hint) => add(path, "value", message, hint),
+    keyProblem: (path, message, hint) => add(path, "key", message, hint),
+    notice: (path, message) => {
+      if (!notices.some((one) => one.path === path && one.message === message)) notices.push({ path, message });
+    },
+  };
+}
+
+function placeOf(path: string, part: "key" | "value", places: Places): Place | null {
+  const own = places(path, part);
+  if (own !== undefined || path === "") return own ?? null;
+  const keys = path.split(".");
+  while (keys.length > 1) {
+    keys.pop();
+    const parent = places(keys.join("."), "key");
+    if (parent !== undefined) return parent;
+  }
+  return places("", "value") ?? null;
+}
