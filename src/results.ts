@@ -2,7 +2,7 @@
  * Shapes of the results, as every room and the public door see them. House units, angles in degrees. In the result file
  * (`--json`) the same keys appear in snake_case; keys that are paths (they hold a dot) and limit state names stay as they are.
  */
-import type { Notice, LimitStateName, Study } from "./study/study.ts";
+import type { LimitStateName, Notice, Study } from "./study/study.ts";
 
 export interface ResultBase {
   /** Title of the study. */
@@ -74,7 +74,7 @@ export interface SheetLine {
   readonly symbol: string;
   readonly text: string;
   readonly formula: string;
-  /** The formula with the numbers put in. */
+  /** The formula with the numbers put in; empty where it holds words alone. */
   readonly substituted: string;
   readonly value: number;
   readonly unit: string;
@@ -100,14 +100,27 @@ export interface Section {
   /** From the top down; bottom is absent on the last. */
   readonly layers: readonly { readonly soil: string; readonly name: string; readonly bottom?: number }[];
   readonly below: { readonly soil: string; readonly name: string };
-  readonly front: { readonly level: number; readonly soil: string; readonly name: string; readonly ignoreTop: number; readonly toeSoil: boolean; readonly passive: boolean };
+  readonly front: {
+    readonly level: number;
+    readonly soil: string;
+    readonly name: string;
+    readonly ignoreTop: number;
+    readonly toeSoil: boolean;
+    readonly passive: boolean;
+  };
   readonly water: { readonly behind?: number; readonly front?: number; readonly flow: "hydrostatic" | "seepage" };
   readonly surcharge?: number;
   readonly strips: readonly { readonly pressure: number; readonly from: number; readonly width: number }[];
   readonly lines: readonly { readonly force: number; readonly at: number }[];
   readonly undersideLevel: number;
   /** Centre and radius of the critical circle, where deep-seated failure was asked for. */
-  readonly circle?: { readonly x: number; readonly z: number; readonly radius: number; readonly entryX: number; readonly exitX: number };
+  readonly circle?: {
+    readonly x: number;
+    readonly z: number;
+    readonly radius: number;
+    readonly entryX: number;
+    readonly exitX: number;
+  };
 }
 
 // ── assess ───────────────────────────────────────────────────────────────────────────────────────────────────────────
@@ -263,7 +276,12 @@ export interface AssessResult extends ResultBase {
   readonly limitStates: Readonly<Partial<Record<LimitStateName, LimitStateAssessment>>>;
   readonly system: SystemAssessment;
   readonly bestEstimate: BestEstimate;
-  readonly target?: { readonly probability: number; readonly reliabilityIndex: number; readonly period?: number; readonly reason?: string };
+  readonly target?: {
+    readonly probability: number;
+    readonly reliabilityIndex: number;
+    readonly period?: number;
+    readonly reason?: string;
+  };
   readonly run: RunRecord;
 }
 

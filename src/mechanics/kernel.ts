@@ -19,6 +19,8 @@ export interface Step {
   readonly of: Readonly<Record<string, Slot>>;
   readonly unit: string;
   readonly source?: string;
+  /** Left out of the sheet where these two columns are equal: a stretch of no length. */
+  readonly unless?: readonly [Slot, Slot];
 }
 
 /** The one formula y = value(x), x an input. May be tabulated where x hangs on a single unknown; a test bounds every table. */

@@ -96,7 +96,7 @@ export function prepareWall(study: Study): Kernel {
     ...(crackWater === undefined ? {} : { crack: crackWater }),
   });
   prepareWaterFront(b, ledger, ponds, frontLevel);
-  const thrust = prepareEarthThrust(b, ledger, o, plane, parts, surcharge, hasWater);
+  const thrust = prepareEarthThrust(b, ledger, o, plane, parts, surcharge, hasWater, ponds.gradient);
   prepareWallWeight(b, ledger, o);
   if (!onWall) prepareHeelSoil(b, ledger, o, layers, ponds);
   const frontSoil = soilOf(study.ground.front.soil);

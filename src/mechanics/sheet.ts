@@ -4,16 +4,43 @@ import type { Columns, Kernel, Step } from "./kernel.ts";
 /** The calculation sheet of a run with one sample: each step beside its column. */
 export function calculationSheet(kernel: Kernel, columns: Columns): readonly SheetLine[] {
   const angles = new Set(kernel.angles);
-  return kernel.steps.map((step) => ({
+  const shown = kernel.steps.filter(
+    ({ unless }) => unless === undefined || columns[unless[0]][0] !== columns[unless[1]][0],
+  );
+  const ranked = shown.map((step, place) => ({ step, rank: rankOf(step.heading), place }));
+  ranked.sort((a, b) => a.rank - b.rank || a.place - b.place);
+  return ranked.map(({ step }) => ({
     heading: step.heading,
     symbol: step.symbol,
     text: step.text,
     formula: withSymbols(step.formula),
-    substituted: withNumbers(step, columns, angles),
+    substituted: step.formula.includes("{") ? withNumbers(step, columns, angles) : "",
     value: columns[step.slot][0] * (angles.has(step.slot) ? 180 / Math.PI : 1),
     unit: angles.has(step.slot) ? "°" : step.unit,
     ...(step.source === undefined ? {} : { source: step.source }),
   }));
+}
+
+/** The order in which one would do the calculation by hand. */
+const order = [
+  "Outline",
+  "Loads",
+  "Water",
+  "Earth pressure",
+  "Earthquake",
+  "Earth thrust",
+  "Weights",
+  "Front",
+  "Base",
+  "Sliding",
+  "Overturning",
+  "Bearing",
+  "Eccentricity",
+];
+
+function rankOf(heading: string): number {
+  const rank = order.findIndex((start) => heading.startsWith(start));
+  return rank < 0 ? order.length : rank;
 }
 
 const braces = /\{([^}]*)\}/g;

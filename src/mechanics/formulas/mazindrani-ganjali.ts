@@ -107,7 +107,8 @@ export function slopeUnstable(
  *
  *   F = ∫ max(p, 0) dx, s in a straight line from s0 (top) to s1 (bottom) over `length`
  *
- * Exact: relative error below 1e-11 against adaptive quadrature (tests/mechanics/formulas/mazindrani-ganjali.test.ts).
+ * Exact: relative error below 1e-11, but for what rounding of s and of the angles moves by itself
+ * (tests/outside/sloping-cohesive-ground).
  *
  * @param s0 vertical stress at the top, kPa
  * @param s1 vertical stress at the bottom, kPa; may equal s0 or lie below it
@@ -122,7 +123,7 @@ export function slopingCohesiveForce(
   frictionAngle: number,
   backfillSlope: number,
 ): number {
-  return weighted(s0, s1, length, cohesion, frictionAngle, backfillSlope, false);
+  return Math.max(weighted(s0, s1, length, cohesion, frictionAngle, backfillSlope, false), 0);
 }
 
 /**
@@ -138,7 +139,7 @@ export function slopingCohesiveMoment(
   frictionAngle: number,
   backfillSlope: number,
 ): number {
-  return weighted(s0, s1, length, cohesion, frictionAngle, backfillSlope, true);
+  return Math.max(weighted(s0, s1, length, cohesion, frictionAngle, backfillSlope, true), 0);
 }
 
 /**

@@ -39,7 +39,12 @@ function prepareInertia(b: KernelBuilder, ledger: Ledger): void {
       ...row,
       x: b.formula("x of the centroid", centroid, [entry.momentX, entry.weight]),
     });
-    ledger.pushes.push({ force: row.horizontal, moment: row.momentZ, sign: 1 });
+    ledger.pushes.push({
+      name: `F_E ${entry.name.toLowerCase()}`,
+      force: row.horizontal,
+      moment: row.momentZ,
+      sign: 1,
+    });
     ledger.weights.push(inertiaWeight(entry, row.vertical, row.momentX));
     b.step(
       "Earthquake",
@@ -115,14 +120,21 @@ export function prepareBase(
       }
     },
   });
-  b.step(heading, weights, "ΣW", "all weights over the base", "sum of the vertical loads", {}, "kN/m");
+  b.step(
+    heading,
+    weights,
+    "ΣW",
+    "all weights over the base",
+    ...sumText(ledger.weights.map((entry) => [entry.name, entry.weight, 1])),
+    "kN/m",
+  );
   b.step(
     heading,
     normal,
     "N′",
     "vertical force on the base, net of the uplift",
-    "{W} + {P} − {U}",
-    { W: weights, P: thrust.vertical, U: uplift?.force ?? b.constant(0) },
+    "{ΣW} + {P_v} − {U}",
+    { ΣW: weights, P_v: thrust.vertical, U: uplift?.force ?? b.constant(0) },
     "kN/m",
   );
   b.step(
@@ -130,24 +142,62 @@ export function prepareBase(
     driving,
     "E",
     "horizontal driving force",
-    "earth + water behind − water in front + inertia",
-    {},
+    ...sumText(ledger.pushes.map((push) => [push.name, push.force, push.sign])),
     "kN/m",
   );
-  b.step(heading, stabilising, "M_stab", "stabilising moment about the toe", "Σ W·x + P_v·x", {}, "kNm/m");
-  b.step(heading, overturning, "M_over", "overturning moment about the toe", "Σ E·z + U·x_U", {}, "kNm/m");
+  b.step(
+    heading,
+    stabilising,
+    "M_stab",
+    "stabilising moment about the toe",
+    ...sumText([
+      ...ledger.weights.map((entry): Term => [`M ${entry.name.toLowerCase()}`, entry.momentX, 1]),
+      ["P_v·x", thrust.verticalMoment, 1],
+      ...(passive === undefined ? [] : [["P_p·z", passive.moment, 1] as Term]),
+    ]),
+    "kNm/m",
+  );
+  b.step(
+    heading,
+    overturning,
+    "M_over",
+    "overturning moment about the toe",
+    ...sumText([
+      ...ledger.pushes.map((push): Term => [`${push.name}·z`, push.moment, push.sign]),
+      ...(uplift === undefined ? [] : [["U·x_U", uplift.moment, 1] as Term]),
+    ]),
+    "kNm/m",
+  );
   b.step(
     heading,
     resultantX,
     "x_R",
     "resultant from the toe",
-    "({s} − {m})/{N}",
-    { s: stabilising, m: overturning, N: normal },
+    "({M_stab} − {M_over})/{N′}",
+    { M_stab: stabilising, M_over: overturning, "N′": normal },
     "m",
   );
-  b.step(heading, effectiveWidth, "B′", "effective width", "2·min({x}, {B} − {x})", { x: resultantX, B: o.width }, "m");
+  b.step(
+    heading,
+    effectiveWidth,
+    "B′",
+    "effective width",
+    "2·min({x_R}, {B} − {x_R})",
+    { x_R: resultantX, B: o.width },
+    "m",
+  );
   Object.assign(b.places, { normal, driving, resultantX, effectiveWidth });
   return { normal, driving, stabilising, overturning, resultantX, effectiveWidth };
+}
+
+type Term = readonly [name: string, slot: Slot, sign: 1 | -1];
+
+/** A sum written out: each term by its name, and by its number beside it. */
+function sumText(terms: readonly Term[]): [formula: string, of: Record<string, Slot>] {
+  const formula = terms
+    .map(([name, , sign], place) => `${sign === 1 ? (place === 0 ? "" : " + ") : " − "}{${name}}`)
+    .join("");
+  return [formula, Object.fromEntries(terms.map(([name, slot]) => [name, slot]))];
 }
 
 /** Factor of safety between 0 and the cap; a driving action of zero or less gives the cap. */

@@ -64,8 +64,8 @@ export function prepareBearing(
     pressure,
     "N′/B′",
     "pressure on the effective width",
-    "{N}/{B}",
-    { N: base.normal, B: base.effectiveWidth },
+    "{N′}/{B′}",
+    { "N′": base.normal, "B′": base.effectiveWidth },
     "kPa",
   );
   const resisting = below.undrained
@@ -78,7 +78,7 @@ export function prepareBearing(
     driving: pressure,
     normal: base.effectiveWidth,
     unit: "kPa",
-    formula: "{R}/{E}",
+    formula: "{resisting}/{driving}",
   });
 }
 
@@ -102,8 +102,8 @@ function undrained(
     inclination,
     "ic",
     "inclination factor",
-    "½·(1 + √(1 − {H}/({B}·{c})))",
-    { H: horizontal, B: base.effectiveWidth, c: below.cohesion },
+    "½·(1 + √(1 − {H}/({B′}·{c_u})))",
+    { H: horizontal, "B′": base.effectiveWidth, c_u: below.cohesion },
     "–",
     source,
   );
@@ -112,8 +112,8 @@ function undrained(
     resisting,
     "q_ult",
     "bearing capacity, undrained",
-    "{f}·((π + 2)·{c}·{i} + {q})",
-    { f: factor, c: below.cohesion, i: inclination, q: surcharge },
+    "{f_q}·((π + 2)·{c_u}·{ic} + {q0})",
+    { f_q: factor, c_u: below.cohesion, ic: inclination, q0: surcharge },
     "kPa",
     source,
   );
@@ -131,9 +131,9 @@ const sourceOf = {
   meyerhof: "Meyerhof (1963)",
 } as const;
 const ngammaText = {
-  vesic: "2·({Nq} + 1)·tan φ′",
-  en1997: "2·({Nq} − 1)·tan φ′",
-  meyerhof: "({Nq} − 1)·tan(1.4·φ′)",
+  vesic: "2·({Nq} + 1)·tan {φ′}",
+  en1997: "2·({Nq} − 1)·tan {φ′}",
+  meyerhof: "({Nq} − 1)·tan(1.4·{φ′})",
 } as const;
 
 function drained(
@@ -177,13 +177,13 @@ function drained(
     nq,
     "Nq",
     "bearing factor",
-    "e^(π·tan {φ})·tan²(45° + {φ}/2)",
-    { φ: phi },
+    "e^(π·tan {φ′})·tan²(45° + {φ′}/2)",
+    { "φ′": phi },
     "–",
     "Prandtl (1921); Reissner (1924)",
   );
-  b.step(heading, nc, "Nc", "bearing factor", "({Nq} − 1)/tan {φ}", { Nq: nq, φ: phi }, "–", "Prandtl (1921)");
-  b.step(heading, ngamma, "Nγ", "bearing factor", ngammaText[bearing], { Nq: nq }, "–", source);
+  b.step(heading, nc, "Nc", "bearing factor", "({Nq} − 1)/tan {φ′}", { Nq: nq, "φ′": phi }, "–", "Prandtl (1921)");
+  b.step(heading, ngamma, "Nγ", "bearing factor", ngammaText[bearing], { Nq: nq, "φ′": phi }, "–", source);
   for (const [symbol, slot, formula, tied] of inclination.steps)
     b.step(heading, slot, symbol, "inclination factor", formula, tied, "–", source);
   if (unitWeight !== below.moist)
@@ -192,8 +192,8 @@ function drained(
       unitWeight,
       "γ′",
       "unit weight below the base, by the depth of the water",
-      "γ_b + ({γ} − γ_b)·min({d}/{B}, 1), γ_b = {γs} − 9.81",
-      { γ: below.moist, γs: below.saturated, d: ponds.depthBelow ?? below.moist, B: base.effectiveWidth },
+      "({γ_sat} − 9.81) + ({γ} − {γ_sat} + 9.81)·min({d}/{B′}, 1)",
+      { γ: below.moist, γ_sat: below.saturated, d: ponds.depthBelow ?? below.moist, "B′": base.effectiveWidth },
       "kN/m³",
     );
   b.step(
@@ -201,17 +201,17 @@ function drained(
     resisting,
     "q_ult",
     "bearing capacity",
-    "{f}·({c}·{Nc}·{ic} + {q}·{Nq}·{iq} + ½·{γ}·{B}·{Nγ}·{iγ})",
+    "{f_q}·({c′}·{Nc}·{ic} + {q0}·{Nq}·{iq} + ½·{γ′}·{B′}·{Nγ}·{iγ})",
     {
-      f: factor,
-      c: below.cohesion,
+      f_q: factor,
+      "c′": below.cohesion,
       Nc: nc,
       ic: inclination.c,
-      q: surcharge,
+      q0: surcharge,
       Nq: nq,
       iq: inclination.q,
-      γ: unitWeight,
-      B: base.effectiveWidth,
+      "γ′": unitWeight,
+      "B′": base.effectiveWidth,
       Nγ: ngamma,
       iγ: inclination.gamma,
     },
@@ -248,8 +248,8 @@ function bracketInclination(
   const gamma = b.formula("iγ", inclinationNgamma, [bracket]);
   const tan = b.formula("tan φ'", tangent, [below.frictionAngle], kink);
   const c = below.hasCohesion ? b.formula("ic", inclinationNc, [q, nc, tan]) : b.constant(0);
-  const tied = { H: horizontal, N: base.normal, B: base.effectiveWidth, c: below.cohesion, k: cot };
-  const inner = "1 − {H}/({N} + {B}·{c}·{k})";
+  const tied = { H: horizontal, "N′": base.normal, "B′": base.effectiveWidth, "c′": below.cohesion, "cot φ′": cot };
+  const inner = "1 − {H}/({N′} + {B′}·{c′}·{cot φ′})";
   return {
     c,
     q,
@@ -257,7 +257,9 @@ function bracketInclination(
     steps: [
       ["iq", q, `(${inner})²`, tied],
       ["iγ", gamma, `(${inner})³`, tied],
-      ...(below.hasCohesion ? [["ic", c, "{iq} − (1 − {iq})/({Nc}·{t})", { iq: q, Nc: nc, t: tan }] as const] : []),
+      ...(below.hasCohesion
+        ? [["ic", c, "{iq} − (1 − {iq})/({Nc}·{tan φ′})", { iq: q, Nc: nc, "tan φ′": tan }] as const]
+        : []),
     ],
   };
 }
@@ -273,7 +275,7 @@ function meyerhofInclination(b: KernelBuilder, base: BaseForces, below: SoilSlot
     gamma,
     steps: [
       ["ic = iq", q, "(1 − {α}/90°)²", { α: angle }],
-      ["iγ", gamma, "(1 − {α}/{φ})²", { α: angle, φ: phi }],
+      ["iγ", gamma, "(1 − {α}/{φ′})²", { α: angle, "φ′": phi }],
     ],
   };
 }

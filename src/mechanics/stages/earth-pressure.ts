@@ -25,9 +25,6 @@ export interface PlanePart {
   readonly moment: Slot;
 }
 
-export const partHeading = (part: { readonly layer: LayerSlots; readonly wet: boolean }, hasWater: boolean): string =>
-  `Earth pressure, ${part.layer.soil.name}${hasWater ? (part.wet ? ", below water" : ", above water") : ""}`;
-
 /**
  * Cuts the plane into parts and carries the vertical effective stress down: σ′v = q + ∫ γ dz − u. At a boundary σ′v goes on and
  * the pressure jumps, because each part has its own coefficient.

@@ -4,9 +4,10 @@ import { slopeUnstable } from "../formulas/mazindrani-ganjali.ts";
 import { activeCoefficientMononobeOkabe, seismicAngle } from "../formulas/mononobe-okabe.ts";
 import { mark, type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
-import { type PlanePart, partHeading } from "./earth-pressure.ts";
+import type { PlanePart } from "./earth-pressure.ts";
 import type { Ledger } from "./ledger.ts";
 import type { Outline } from "./outline.ts";
+import { listPartSteps } from "./part-sheet.ts";
 import type { PlaneOfPressure } from "./pressure-law.ts";
 
 /** The earth thrust at the base: horizontal and vertical part, and their moments. */
@@ -38,6 +39,7 @@ export function prepareEarthThrust(
   parts: readonly PlanePart[],
   surcharge: Slot,
   hasWater: boolean,
+  gradient: Slot,
 ): EarthThrust {
   const factor = b.input("model.factors.earth_thrust");
   const terms = parts.map((part) => ({ slot: part.thrust }));
@@ -67,16 +69,16 @@ export function prepareEarthThrust(
           o.thickness,
           o.backTangent,
         ]);
-  ledger.pushes.push({ force: horizontal, moment: horizontalMoment, sign: 1 });
-  listEarthForces(b, o, plane, parts, surcharge, factor, hasWater, quake);
+  ledger.pushes.push({ name: "P_h", force: horizontal, moment: horizontalMoment, sign: 1 });
+  listEarthForces(b, o, plane, parts, surcharge, factor, hasWater, gradient, quake);
   const heading = "Earth thrust";
   b.step(
     heading,
     horizontal,
     "P_h",
     "horizontal part of the whole earth thrust",
-    "{P}·{c}·{f}",
-    { P: total, c: across, f: factor },
+    "{ΣP}·{cos}·{f_E}",
+    { ΣP: total, cos: across, f_E: factor },
     "kN/m",
   );
   b.step(
@@ -84,8 +86,8 @@ export function prepareEarthThrust(
     horizontalMoment,
     "P_h·z",
     "its moment about the underside",
-    "Σ P·z·{c}·{f}",
-    { c: across, f: factor },
+    "{ΣPz}·{cos}·{f_E}",
+    { ΣPz: totalMoment, cos: across, f_E: factor },
     "kNm/m",
   );
   if (b.constantOf(along) !== 0) {
@@ -94,8 +96,8 @@ export function prepareEarthThrust(
       vertical,
       "P_v",
       "vertical part of the whole earth thrust",
-      "{P}·{s}·{f}",
-      { P: total, s: along, f: factor },
+      "{ΣP}·{sin}·{f_E}",
+      { ΣP: total, sin: along, f_E: factor },
       "kN/m",
     );
     b.step(
@@ -103,8 +105,8 @@ export function prepareEarthThrust(
       verticalMoment,
       "P_v·x",
       "its moment about the toe",
-      "Σ P·x·{s}·{f}",
-      { s: along, f: factor },
+      plane.kind === "virtual_back" ? "{P_v}·{B}" : "Σ P·x along the back face, {P_v} in all",
+      { P_v: vertical, B: o.width },
       "kNm/m",
     );
   }
@@ -120,6 +122,7 @@ function listEarthForces(
   surcharge: Slot,
   factor: Slot,
   hasWater: boolean,
+  gradient: Slot,
   quake: { thrust: Slot; moment: Slot } | undefined,
 ): void {
   const hasSurcharge = b.constantOf(surcharge) !== 0;
@@ -132,38 +135,7 @@ function listEarthForces(
       thrust = b.sum("thrust of the soil alone", [{ slot: part.thrust }, { slot: share.thrust, sign: -1 }]);
       moment = b.sum("moment of the soil alone", [{ slot: part.moment }, { slot: share.moment, sign: -1 }]);
     }
-    const heading = partHeading(part, hasWater);
-    b.step(heading, part.stressTop, "σ′v,top", "vertical effective stress at its top", "carried down", {}, "kPa");
-    b.step(
-      heading,
-      part.stressBottom,
-      "σ′v,bottom",
-      "vertical effective stress at its bottom",
-      "{s} + γ·({a} − {b})",
-      { s: part.stressTop, a: part.top, b: part.bottom },
-      "kPa",
-    );
-    b.step(
-      heading,
-      part.thrust,
-      "P",
-      "thrust of this part, positive pressure alone",
-      part.law.kind === "linear"
-        ? "½·(p_top + p_bottom)·({a} − {b}), cut at zero"
-        : "∫ p dz in closed form, cut at zero",
-      { a: part.top, b: part.bottom },
-      "kN/m",
-      part.law.kind === "curved" ? "Mazindrani and Ganjali (1997)" : undefined,
-    );
-    b.step(
-      heading,
-      part.moment,
-      "P·z",
-      "its moment about the underside",
-      "{P} × height of its centroid",
-      { P: part.thrust },
-      "kNm/m",
-    );
+    listPartSteps(b, part, hasWater, gradient);
     pushThrustRow(
       b,
       o,
@@ -282,8 +254,8 @@ function prepareIncrement(
       angle,
       "ψ",
       `seismic angle, ${soil.name}${part.wet ? " below water" : ""}`,
-      "atan({kh}/(1 − {kv})·{m})",
-      { kh, kv, m: ratio },
+      "atan({kh}/(1 − {kv})·{mass ratio})",
+      { kh, kv, "mass ratio": ratio },
       "rad",
       part.wet ? "EN 1998-5:2004, Annex E" : "Mononobe and Matsuo (1929); Okabe (1926)",
     );
@@ -330,8 +302,8 @@ function prepareIncrement(
     moment,
     "ΔP_E·z",
     "at 0.6 of the height of the plane",
-    "{P}·0.6·{H}",
-    { P: thrust, H: plane.top },
+    "{ΔP_E}·0.6·{z_top}",
+    { ΔP_E: thrust, z_top: plane.top },
     "kNm/m",
   );
   return { thrust, moment };

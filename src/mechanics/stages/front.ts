@@ -68,7 +68,15 @@ export function prepareFrontSurcharge(b: KernelBuilder, front: FrontGround): Slo
   const at = b.formula("front stress at the underside", positiveFrontStress, [zero, ...rest]);
   const ignored = b.formula("front stress at the ignored top", positiveFrontStress, [front.ignoredTo, ...rest]);
   const slot = b.formula("stress beside the base", surchargeInFront, [at, ignored]);
-  b.step("Bearing", slot, "q0", "vertical effective stress beside the base", "{a} − {b}", { a: at, b: ignored }, "kPa");
+  b.step(
+    "Bearing",
+    slot,
+    "q0",
+    "vertical effective stress beside the base",
+    "{σ′v,underside} − {σ′v,ignored top}",
+    { "σ′v,underside": at, "σ′v,ignored top": ignored },
+    "kPa",
+  );
   return slot;
 }
 
@@ -158,8 +166,8 @@ export function preparePassive(b: KernelBuilder, front: FrontGround): Passive | 
     force,
     "P_p",
     "passive resistance that is counted",
-    "{m}·∫ ({K}·σ′v + 2·{c}·√{K}) dz from {a} to {e}",
-    { m: mobilised, K: coefficient, c: cohesion, a: ignoredTo, e: tip },
+    "{mobilised}·∫ ({Kp}·σ′v + 2·{c′}·√{Kp}) dz from {z_bottom} to {z_top}",
+    { mobilised, Kp: coefficient, "c′": cohesion, z_top: ignoredTo, z_bottom: tip },
     "kN/m",
   );
   return { force, moment };

@@ -16,6 +16,8 @@ export interface Weight {
 
 /** A horizontal push: force, and its moment about the underside; negative where it resists. */
 export interface Push {
+  /** Symbol in the sums of the sheet. */
+  readonly name: string;
   readonly force: Slot;
   readonly moment: Slot;
   readonly sign: 1 | -1;

@@ -66,8 +66,8 @@ export function prepareSurchargeWeight(
     weight,
     "Q_heel",
     "surcharge on the heel, as asked",
-    "{q}·{r}",
-    { q: b.input("loads.surcharge.pressure"), r: run },
+    "{q}·{run}",
+    { q: b.input("loads.surcharge.pressure"), run },
     "kN/m",
   );
 }
@@ -176,7 +176,7 @@ function pushLoad(
 ): void {
   const force = b.formula("load thrust, factored", product, [thrust, factor]);
   const about = b.formula("load moment, factored", product, [moment, factor]);
-  ledger.pushes.push({ force, moment: about, sign: 1 });
+  ledger.pushes.push({ name: name.toLowerCase(), force, moment: about, sign: 1 });
   b.forces.push({ name, group: "surcharge", horizontal: force, momentZ: about, x: planeX });
   b.step(
     "Loads",
@@ -188,5 +188,5 @@ function pushLoad(
     "kN/m",
     "Boussinesq (1885), doubled for a rigid wall",
   );
-  b.step("Loads", about, "P_load·z", "its moment about the underside", "∫ of it × height", {}, "kNm/m");
+  b.step("Loads", about, "P_load·z", "its moment about the underside", "moment of the same diagram", {}, "kNm/m");
 }

@@ -56,8 +56,8 @@ export function prepareSliding(
       resisting,
       "R",
       "resistance to sliding, undrained",
-      "{f}·{c}·{B} + {P}",
-      { f: factorOfBase, c: below.cohesion, B: base.effectiveWidth, P: passiveForce },
+      "{f_R}·{c_u}·{B′} + {P_p}",
+      { f_R: factorOfBase, c_u: below.cohesion, "B′": base.effectiveWidth, P_p: passiveForce },
       "kN/m",
     );
   finish(b, {
@@ -67,7 +67,7 @@ export function prepareSliding(
     driving: base.driving,
     normal: base.normal,
     unit: "kN/m",
-    formula: "{R}/{E}",
+    formula: "{resisting}/{driving}",
   });
 }
 
@@ -106,8 +106,8 @@ function drained(
       tangent,
       "tan δ",
       "friction of the base",
-      "tan({r}·{φ})",
-      { r: b.input("wall.sliding_friction.ratio"), φ: below.frictionAngle },
+      "tan({ratio}·{φ′})",
+      { ratio: b.input("wall.sliding_friction.ratio"), "φ′": below.frictionAngle },
       "–",
     );
   else
@@ -125,8 +125,8 @@ function drained(
     resisting,
     "R",
     "resistance to sliding",
-    "{f}·({N}·{t} + {a}·{L}) + {P}",
-    { f: factor, N: base.normal, t: tangent, a: adhesion, L: length, P: passive },
+    "{f_R}·({N′}·{tan δ} + {a}·{L}) + {P_p}",
+    { f_R: factor, "N′": base.normal, "tan δ": tangent, a: adhesion, L: length, P_p: passive },
     "kN/m",
   );
   return resisting;
@@ -167,7 +167,7 @@ export function finish(b: KernelBuilder, ratio: Ratio): void {
     "F",
     `factor of safety against ${limitState === "bearing" ? "bearing failure" : limitState}`,
     ratio.formula,
-    { R: resisting, E: driving },
+    { resisting, driving },
     "–",
   );
 }
@@ -180,7 +180,7 @@ export function prepareOverturning(b: KernelBuilder, base: BaseForces): void {
     resisting: base.stabilising,
     driving: base.overturning,
     unit: "kNm/m",
-    formula: "{R}/{E}",
+    formula: "{resisting}/{driving}",
   });
 }
 
@@ -196,8 +196,8 @@ export function prepareEccentricity(b: KernelBuilder, o: Outline, base: BaseForc
     eccentricity,
     "|e|",
     "distance of the resultant from the middle",
-    "|{B}/2 − {x}|",
-    { B: o.width, x: base.resultantX },
+    "|{B}/2 − {x_R}|",
+    { B: o.width, x_R: base.resultantX },
     "m",
   );
   finish(b, {
@@ -207,6 +207,6 @@ export function prepareEccentricity(b: KernelBuilder, o: Outline, base: BaseForc
     driving: eccentricity,
     normal: base.effectiveWidth,
     unit: "m",
-    formula: "{R}/{E}",
+    formula: "{resisting}/{driving}",
   });
 }

@@ -69,40 +69,72 @@ export function prepareHeelSoil(
       momentZ: part.momentZ,
       shakes: true,
     });
-    const area = b.formula("area of a layer over the heel", difference, [above.area, below.area]);
-    b.step(
-      "Weights",
-      area,
-      `A_heel,${place + 1}`,
-      `area of ${layer.soil.name} over the heel`,
-      "between {a} and {b}",
-      { a: bottom, b: topLevel },
-      "m²",
-    );
-    b.step(
-      "Weights",
-      part.area,
-      `W_heel,${place + 1}`,
-      `weight of ${layer.soil.name} over the heel`,
-      water === undefined ? "{γ}·{A}" : "{γ}·A above water + {γs}·A below water, A = {A}",
-      { γ: layer.soil.moist, γs: layer.soil.saturated, A: area },
-      "kN/m",
-    );
-    b.step(
-      "Weights",
-      part.momentX,
-      `M_heel,${place + 1}`,
-      "its moment about the toe",
-      "{W} × arm of its centroid",
-      { W: part.area },
-      "kNm/m",
-    );
+    listSoil(b, {
+      symbol: `heel,${place + 1}`,
+      text: `${layer.soil.name} over the heel`,
+      soil: layer.soil,
+      part,
+      above,
+      below,
+      water,
+    });
     above = below;
     topLevel = bottom;
   });
 }
 
 const difference = (a: number, b: number): number => a - b;
+const wetArea = (above: number, below: number, water: number): number =>
+  clamp(water, below, Math.max(above, below)) - below;
+const armOf = (moment: number, weight: number): number => (weight === 0 ? 0 : moment / weight);
+
+interface SoilLines {
+  readonly symbol: string;
+  readonly text: string;
+  readonly soil: SoilSlots;
+  readonly part: Record<keyof UpTo, Slot>;
+  readonly above: UpTo;
+  readonly below: UpTo;
+  readonly water: UpTo | undefined;
+}
+
+/** Lines of the sheet for soil over the base: its area above and below water, weight, arm. */
+function listSoil(b: KernelBuilder, { symbol, text, soil, part, above, below, water }: SoilLines): void {
+  const heading = "Weights";
+  const unless: readonly [Slot, Slot] = [above.area, below.area];
+  const add = (
+    slot: Slot,
+    name: string,
+    words: string,
+    formula: string,
+    of: Record<string, Slot>,
+    unit: string,
+  ): void => {
+    b.steps.push({ heading, slot, symbol: `${name}_${symbol}`, text: `${words} ${text}`, formula, of, unit, unless });
+  };
+  const area = b.formula("area of a layer over the base", difference, [above.area, below.area]);
+  const weight = `W_${symbol}`;
+  if (water === undefined) {
+    add(area, "A", "area of", "by the outline", {}, "m²");
+    add(part.area, "W", "weight of", "{γ}·{A}", { γ: soil.moist, A: area }, "kN/m");
+  } else {
+    const wet = b.formula("area below water", wetArea, [above.area, below.area, water.area]);
+    const moist = b.formula("area above water", difference, [area, wet]);
+    add(moist, "A", "area, above water, of", "by the outline", {}, "m²");
+    add(wet, "A_wet", "area, below water, of", "by the outline", {}, "m²");
+    add(
+      part.area,
+      "W",
+      "weight of",
+      "{γ}·{A} + {γ_sat}·{A_wet}",
+      { γ: soil.moist, A: moist, γ_sat: soil.saturated, A_wet: wet },
+      "kN/m",
+    );
+  }
+  const arm = b.formula("arm of a soil over the base", armOf, [part.momentX, part.area]);
+  add(arm, "x", "distance from the toe of the centroid of", "by the outline", {}, "m");
+  add(part.momentX, "M", "moment about the toe of", `{${weight}}·{x}`, { [weight]: part.area, x: arm }, "kNm/m");
+}
 
 /** Soil over the toe and free water above it, or above the slab where that soil is left out. */
 export function prepareToeSoil(
@@ -136,15 +168,7 @@ export function prepareToeSoil(
         momentZ: part.momentZ,
         shakes: false,
       });
-      b.step(
-        "Weights",
-        part.area,
-        "W_toe",
-        "weight of the soil over the toe",
-        "{γ}·A above water + {γs}·A below water, A = {A}",
-        { γ: soil.moist, γs: soil.saturated, A: ground.area },
-        "kN/m",
-      );
+      listSoil(b, { symbol: "toe", text: `${soil.name} over the toe`, soil, part, above: ground, below: floor, water });
     }
   }
   if (water === undefined) return;
@@ -164,8 +188,8 @@ export function prepareToeSoil(
     weight,
     "W_wt",
     "weight of the free water over the toe",
-    "9.81·({w} − {g})",
-    { w: water.area, g: ground.area },
+    "9.81·({A_w} − {A_g}), areas up to the water and up to the ground",
+    { A_w: water.area, A_g: ground.area },
     "kN/m",
   );
 }

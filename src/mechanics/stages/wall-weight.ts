@@ -48,11 +48,19 @@ function stemWeight(b: KernelBuilder, ledger: Ledger, o: Outline, unitWeight: Sl
     weight,
     "W_stem",
     "weight of the stem",
-    "{γ}·{h}·({m} + {f}/2 + {r}/2)",
-    { γ: unitWeight, h: o.stemHeight, m: middle, f: o.frontRun, r: o.backRun },
+    "{γ}·{h}·({b_middle} + {front run}/2 + {back run}/2)",
+    { γ: unitWeight, h: o.stemHeight, b_middle: middle, "front run": o.frontRun, "back run": o.backRun },
     "kN/m",
   );
-  b.step("Weights", momentX, "M_stem", "its moment about the toe", "{W} × arm of each part", { W: weight }, "kNm/m");
+  b.step(
+    "Weights",
+    momentX,
+    "M_stem",
+    "its moment about the toe",
+    "{W_stem} × arm of its centroid",
+    { W_stem: weight },
+    "kNm/m",
+  );
 }
 
 const middleOfStem = (foot: number, backRun: number, frontRun: number): number =>
@@ -72,7 +80,15 @@ function baseWeight(b: KernelBuilder, ledger: Ledger, o: Outline, unitWeight: Sl
     { γ: unitWeight, B: o.width, t: o.thickness },
     "kN/m",
   );
-  b.step("Weights", momentX, "M_base", "its moment about the toe", "{W}·{B}/2", { W: weight, B: o.width }, "kNm/m");
+  b.step(
+    "Weights",
+    momentX,
+    "M_base",
+    "its moment about the toe",
+    "{W_base}·{B}/2",
+    { W_base: weight, B: o.width },
+    "kNm/m",
+  );
 }
 
 function keyWeight(b: KernelBuilder, ledger: Ledger, unitWeight: Slot): void {

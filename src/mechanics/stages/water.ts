@@ -57,8 +57,8 @@ export function prepareWaterLevels(b: KernelBuilder, o: Outline, top: Slot, fron
       gradient,
       "i",
       "head lost per metre of seepage path",
-      "({zw} − {zf}) / ({zw} + {B} + min({zf}, {g}))",
-      { zw: behind ?? zero, zf: front ?? zero, B: o.width, g: frontLevel },
+      "({z_w} − {z_f}) / ({z_w} + {B} + min({z_f}, {z_g}))",
+      { z_w: behind ?? zero, z_f: front ?? zero, B: o.width, z_g: frontLevel },
       "–",
       "linear head loss along the path",
     );
@@ -108,8 +108,8 @@ export function prepareUplift(b: KernelBuilder, o: Outline, ponds: Ponds, frontL
     atHeel,
     "u_heel",
     "water pressure under the heel",
-    "9.81·{z}·(1 − {i})",
-    { z: ponds.behind ?? zero, i: ponds.gradient },
+    "9.81·{z_w}·(1 − {i})",
+    { z_w: ponds.behind ?? zero, i: ponds.gradient },
     "kPa",
   );
   b.step(
@@ -117,8 +117,8 @@ export function prepareUplift(b: KernelBuilder, o: Outline, ponds: Ponds, frontL
     atToe,
     "u_toe",
     "water pressure under the toe",
-    "9.81·({z} + {i}·z_e)",
-    { z: ponds.front ?? zero, i: ponds.gradient },
+    "9.81·({z_f} + {i}·min({z_f}, {z_g}))",
+    { z_f: ponds.front ?? zero, i: ponds.gradient, z_g: frontLevel },
     "kPa",
   );
   b.step(
@@ -126,8 +126,8 @@ export function prepareUplift(b: KernelBuilder, o: Outline, ponds: Ponds, frontL
     force,
     "U",
     "uplift, linear from heel to toe",
-    "({h} + {t})/2·{B}",
-    { h: atHeel, t: atToe, B: o.width },
+    "({u_heel} + {u_toe})/2·{B}",
+    { u_heel: atHeel, u_toe: atToe, B: o.width },
     "kN/m",
   );
   b.step(
@@ -135,8 +135,8 @@ export function prepareUplift(b: KernelBuilder, o: Outline, ponds: Ponds, frontL
     moment,
     "U·x_U",
     "its moment about the toe",
-    "(2·{h} + {t})·{B}²/6",
-    { h: atHeel, t: atToe, B: o.width },
+    "(2·{u_heel} + {u_toe})·{B}²/6",
+    { u_heel: atHeel, u_toe: atToe, B: o.width },
     "kNm/m",
   );
   return { force, moment, atToe };
@@ -191,17 +191,27 @@ export function prepareWaterBehind(
   const moment = cracked
     ? b.formula("water moment behind", crackedWaterMoment, cracked)
     : b.formula("water moment behind", third, [force, level]);
-  ledger.pushes.push({ force, moment, sign: 1 });
+  ledger.pushes.push({ name: "E_w", force, moment, sign: 1 });
   b.step(
     "Water",
     force,
     "E_w",
     plane.crack === undefined ? "thrust of the water behind" : "thrust of the water behind, crack full",
-    plane.crack === undefined ? "½·9.81·(1 − {i})·{z}²" : "½·9.81·({T} − {k})² + water in the ground below {k}",
-    { i: ponds.gradient, z: level, T: plane.top, k: plane.crack ?? level },
+    plane.crack === undefined
+      ? "½·9.81·(1 − {i})·{z_w}²"
+      : "½·9.81·({z_top} − {z_crack})² + water in the ground below {z_crack}",
+    { i: ponds.gradient, z_w: level, z_top: plane.top, z_crack: plane.crack ?? level },
     "kN/m",
   );
-  b.step("Water", moment, "E_w·z", "its moment about the underside", "∫ {E} · z", { E: force }, "kNm/m");
+  b.step(
+    "Water",
+    moment,
+    "E_w·z",
+    "its moment about the underside",
+    cracked ? "moment of the diagram" : "{E_w}·{z_w}/3",
+    { E_w: force, z_w: level },
+    "kNm/m",
+  );
   if (plane.backTangent === undefined) {
     b.forces.push({ name: "Water behind", group: "water", horizontal: force, momentZ: moment, x: o.width });
     return;
@@ -253,7 +263,7 @@ export function prepareWaterFront(b: KernelBuilder, ledger: Ledger, ponds: Ponds
   const moment = b.formula("water moment in front", momentFront, [ponds.front, ponds.gradient, frontLevel]);
   const towards = b.formula("water thrust in front, towards the front", negative, [force]);
   const towardsMoment = b.formula("water moment in front, towards the front", negative, [moment]);
-  ledger.pushes.push({ force, moment, sign: -1 });
+  ledger.pushes.push({ name: "E_wf", force, moment, sign: -1 });
   b.forces.push({
     name: "Water in front",
     group: "water",
@@ -266,8 +276,8 @@ export function prepareWaterFront(b: KernelBuilder, ledger: Ledger, ponds: Ponds
     force,
     "E_wf",
     "thrust of the water in front",
-    "½·9.81·({z}² + {i}·z_e²)",
-    { z: ponds.front, i: ponds.gradient },
+    "½·9.81·({z_f}² + {i}·min({z_f}, {z_g})²)",
+    { z_f: ponds.front, i: ponds.gradient, z_g: frontLevel },
     "kN/m",
   );
 }
