@@ -50,3 +50,13 @@ function placeOf(path: string, part: "key" | "value", places: Places): Place | n
   }
   return places("", "value") ?? null;
 }
+
+/** A misspelt key is also a missing one; the second message would only distract from the first. */
+export function withoutEchoes(problems: readonly Problem[]): readonly Problem[] {
+  const misspelt = new Set<string>();
+  for (const { path, hint } of problems) {
+    const meant = /^did you mean "([^"]+)"\?$/.exec(hint ?? "")?.[1];
+    if (meant !== undefined) misspelt.add([...path.split(".").slice(0, -1), meant].join("."));
+  }
+  return problems.filter(({ path, message }) => !(message.startsWith("is missing") && misspelt.has(path)));
+}

@@ -1,7 +1,10 @@
 /** Text or tree of a study -> `Study`, or a `StudyError` with everything that is wrong. */
 import { StudyError } from "../errors.ts";
 import { buildStudy, treeReader } from "./build-study.ts";
-import { collectFindings, type Findings, type Places } from "./findings.ts";
+import type { TryChange } from "./check-decision.ts";
+import { crossCheck } from "./cross-checks.ts";
+import { collectFindings, type Findings, type Places, withoutEchoes } from "./findings.ts";
+import { type NotAvailable, notAvailable, refuseNotAvailable } from "./not-available.ts";
 import { withValueAt } from "./paths.ts";
 import { plainTree } from "./plain-tree.ts";
 import { studySchema } from "./schema.ts";
@@ -14,7 +17,11 @@ export interface ReadOptions {
   readonly file?: string;
   /** Values to set before reading, by path; a text is read as YAML, as on a command line. */
   readonly set?: readonly (readonly [path: string, value: unknown])[];
+  /** What is answered with "not available in this version"; the list of this version where left out. */
+  readonly notAvailable?: readonly NotAvailable[];
 }
+
+const nowhere: Places = () => undefined;
 
 /**
  * @param text YAML 1.2 or JSON, at most 1 MB
@@ -30,10 +37,10 @@ export function readStudy(text: string, options: ReadOptions = {}): Study {
 
 /** As `readStudy`, from a tree that is already parsed (plain objects, lists, numbers, texts). */
 export function readDocument(document: unknown, options: ReadOptions = {}): Study {
-  const findings = collectFindings(() => undefined);
+  const findings = collectFindings(nowhere);
   const tree = plainTree(document, findings);
   if (findings.problems.length > 0) throw new StudyError(findings.problems, options.file);
-  return readSound(tree, () => undefined, options);
+  return readSound(tree, nowhere, options);
 }
 
 /**
@@ -42,15 +49,23 @@ export function readDocument(document: unknown, options: ReadOptions = {}): Stud
  *
  * @throws StudyError where the changed study is wrong
  */
-export function studyWith(study: Study, changes: Readonly<Record<string, unknown>>): Study {
-  const findings = collectFindings(() => undefined);
-  const values = plainTree(changes, findings) as Record<string, unknown>;
-  const tree = setAll(study.document, Object.entries(values), findings);
-  if (findings.problems.length > 0) throw new StudyError(findings.problems, study.file);
-  return readSound(tree, () => undefined, { file: study.file });
+export function studyWith(
+  study: Study,
+  changes: Readonly<Record<string, unknown>>,
+  options: Pick<ReadOptions, "notAvailable"> = {},
+): Study {
+  return changedStudy(study.document, changes, { ...options, file: study.file });
 }
 
-function readSound(tree: unknown, places: Places, options: ReadOptions): Study {
+function changedStudy(document: unknown, changes: Readonly<Record<string, unknown>>, options: ReadOptions): Study {
+  const findings = collectFindings(nowhere);
+  const values = plainTree(changes, findings) as Record<string, unknown>;
+  const tree = setAll(document, Object.entries(values), findings);
+  if (findings.problems.length > 0) throw new StudyError(findings.problems, options.file);
+  return readSound(tree, nowhere, options, true);
+}
+
+function readSound(tree: unknown, places: Places, options: ReadOptions, changed = false): Study {
   const set = options.set ?? [];
   const findings = collectFindings(
     set.length === 0
@@ -67,8 +82,18 @@ function readSound(tree: unknown, places: Places, options: ReadOptions): Study {
   );
   const clean = withoutEmpty(document, studySchema);
   checkStructure(studySchema, clean, "", findings);
-  const study = buildStudy(treeReader(clean, findings), options.file ?? "", document);
-  if (findings.problems.length > 0) throw new StudyError(findings.problems, options.file);
+  const list = options.notAvailable ?? notAvailable;
+  refuseNotAvailable(clean, list, findings);
+  const reader = treeReader(clean, findings);
+  const tryChange: TryChange = (changes) =>
+    changedStudy(document, changes, { ...options, set: [], notAvailable: list });
+  const study = crossCheck(
+    buildStudy(reader, options.file ?? "", document),
+    reader,
+    changed || set.length > 0,
+    tryChange,
+  );
+  if (findings.problems.length > 0) throw new StudyError(withoutEchoes(findings.problems), options.file);
   return study;
 }
 
@@ -85,7 +110,7 @@ function setAll(tree: unknown, values: readonly (readonly [string, unknown])[], 
 /** A text as YAML: `2.5`, `2.5 m`, `{ uniform: { from: 0, to: 1 } }`. */
 function parsedText(path: string, value: unknown, findings: Findings): unknown {
   if (typeof value !== "string") return plainTree(value, findings);
-  const inside = collectFindings(() => undefined);
+  const inside = collectFindings(nowhere);
   const parsed = readTree(value, textPlaces(value), inside);
   for (const problem of inside.problems) findings.problem(path, `"${value}" ${problem.message}`, problem.hint);
   return parsed;

@@ -105,10 +105,13 @@ const soil = group("One soil. The same soil under several headings is one set of
 });
 
 /** A letter, then letters, digits, _ or -: a soil's name is part of paths. */
-const soilName = z.string().refine((name) => /^\p{L}[\p{L}\p{N}_-]*$/u.test(name) && !isReservedKey(name), {
-  error:
-    "a soil's name in paths begins with a letter and holds letters, digits, _ and - only; give its full name as name: …",
-});
+const soilName = z
+  .string()
+  .regex(/^\p{L}[\p{L}\p{N}_-]*$/u, {
+    error:
+      "a soil's name in paths begins with a letter and holds letters, digits, _ and - only; give its full name as name: …",
+  })
+  .refine((name) => !isReservedKey(name), { error: "cannot be the name of a soil; choose another" });
 
 const soilReference = z
   .string()
@@ -285,13 +288,11 @@ const assessment = group("What is assessed, and how finely", {
       ),
       wanted: "a number from 0 to below 1",
     }),
-  period: years
-    .optional()
-    .meta({
-      ...about("Years that are looked ahead; needed when anything is yearly, not allowed otherwise", 50),
-      unit: "years",
-      wanted: "a number of years above 0",
-    }),
+  period: years.optional().meta({
+    ...about("Years that are looked ahead; needed when anything is yearly, not allowed otherwise", 50),
+    unit: "years",
+    wanted: "a number of years above 0",
+  }),
   target: target.optional(),
 });
 
@@ -351,12 +352,10 @@ const decision = group("What can be done, what it costs, and what could be inves
     .string()
     .optional()
     .meta(about("Currency of all costs", "EUR", "")),
-  failure_cost: z
-    .union([money, group("Cost of failure by limit state", perLimitState)])
-    .meta({
-      ...about("Cost of failure: a number, or one per limit state", 900000),
-      wanted: "a cost of at least 0, or one per limit state,",
-    }),
+  failure_cost: z.union([money, group("Cost of failure by limit state", perLimitState)]).meta({
+    ...about("Cost of failure: a number, or one per limit state", 900000),
+    wanted: "a cost of at least 0, or one per limit state,",
+  }),
   must_meet_target: flag(
     "Options that miss the target are out, but for those marked always_open",
     defaults.mustMeetTarget,
@@ -380,12 +379,10 @@ const decision = group("What can be done, what it costs, and what could be inves
       group("One investigation: informs a path with tests, or a list of them", {
         name: z.string().meta(about("Name of the investigation", "Six shear-box tests on the sand")),
         cost: money.optional().meta({ ...about("Price of the investigation", 6500), wanted: "a cost of at least 0" }),
-        informs: z
-          .union([pathText, z.array(informed).min(1)])
-          .meta({
-            ...about("What it tells about: a path, or a list of path and tests", "soils.sand.friction_angle"),
-            wanted: "a path, or a list of { path, tests, error },",
-          }),
+        informs: z.union([pathText, z.array(informed).min(1)]).meta({
+          ...about("What it tells about: a path, or a list of path and tests", "soils.sand.friction_angle"),
+          wanted: "a path, or a list of { path, tests, error },",
+        }),
         tests: testCount.optional(),
         error: testError,
         transformation: testShared,
