@@ -34,7 +34,7 @@ export function positiveCentre(p0: number, p1: number, length: number): number {
  */
 export function zeroCrossing(p0: number, p1: number, length: number): number {
   if (p0 > 0) return 0;
-  return p1 > 0 ? length * (p0 / (p0 - p1)) : length;
+  return p1 > 0 ? length * Math.abs(p0 / (p0 - p1)) : length;
 }
 
 /**

@@ -1,3 +1,5 @@
+import { activeCoefficientRankineSloping } from "./rankine.ts";
+
 /*
  * Active pressure of cohesive ground that rises at β, on a vertical plane, parallel to the slope.
  *
@@ -7,7 +9,10 @@
  *
  * with the vertical effective stress s for the authors' γz. p turns positive at s* = 2 c′ tan(45° + φ′/2), whatever the
  * slope. Where R < 0 (β > φ′ and s beyond sLimit = c′ cos φ′ / (cos β sin(β − φ′))) there is no active state: √R is
- * taken as 0 there. With L = (2 cos²β − cos²φ′) s + 2 c′ cos φ′ sin φ′ the same p, without cancellation, is
+ * taken as 0 there. At c′ = 0 the pressure is K s with the coefficient of `rankine.ts`, which is the limit c′ → 0 where
+ * β ≤ φ′; where β > φ′ the two formulas do not meet with their roots at 0 (K = cos β against
+ * cos β (2 cos²β/cos²φ′ − 1)), so the pressure jumps at c′ = 0 on a slope that is unstable anyway, and marked.
+ * With L = (2 cos²β − cos²φ′) s + 2 c′ cos φ′ sin φ′ the same p, without cancellation, is
  *
  *   p = cos β cos²φ′ (s − s*) (s + 2 c′ tan(45° − φ′/2)) / (L + √R)
  *
@@ -36,6 +41,9 @@ const weight: Float64Array = Float64Array.of(
   0.062253523938647894,
   0.027152459411754096,
 );
+
+/** kPa; less than this counts as none, so that products of it do not underflow. */
+const leastCohesion = 1e-100;
 
 /** Vertical stress at which the pressure turns positive, 2 c′ tan(45° + φ′/2). */
 function turningStress(cohesion: number, sinPhi: number, cosPhi: number): number {
@@ -80,6 +88,7 @@ export function slopingCohesivePressure(
   backfillSlope: number,
 ): number {
   const s = Math.max(verticalStress, 0);
+  if (!(cohesion > leastCohesion)) return activeCoefficientRankineSloping(frictionAngle, backfillSlope) * s;
   const sinPhi = Math.sin(frictionAngle);
   const cosPhi = Math.cos(frictionAngle);
   const excess = s - turningStress(cohesion, sinPhi, cosPhi);
@@ -167,6 +176,7 @@ function weighted(
   const positive = sa > low ? length * ((sb - sa) / (sb - low)) : length;
   const h0 = moment ? (s1 >= s0 ? positive : length - positive) : 1;
   const h1 = moment ? (s1 >= s0 ? -positive : positive) : 0;
+  if (!(c > leastCohesion)) return positive * activeCoefficientRankineSloping(phi, beta) * meanOfLine(sa, sb, h0, h1);
 
   const limit =
     sinBeta * cosPhi > cosBeta * sinPhi ? (c * cosPhi) / (cosBeta * (sinBeta * cosPhi - cosBeta * sinPhi)) : Infinity;

@@ -36,6 +36,8 @@ while done < 200:
     c = random.choice([0, 5, round(random.uniform(0, 40), 1), round(10 ** random.uniform(-4, 3), 4)])
     s0 = random.choice([0, round(random.uniform(0, 150), 1), round(10 ** random.uniform(-2, 4), 2)])
     s1 = random.choice([round(s0 + random.uniform(0, 150), 1), round(s0 + 0.001, 4), s0, round(s0 * 0.6, 2), round(random.uniform(0, 250), 1)])
+    if c == 0 and beta > phi:
+        continue  # no active state anywhere: what is taken there is a convention of the program, not of the paper
     length = round(random.uniform(0.2, 9), 2)
     args = [mp.mpf(str(v)) for v in (s0, s1, length, c)] + [mp.mpf(str(v)) * mp.pi / 180 for v in (phi, beta)]
     force, moment = integrals(*args)
