@@ -8,20 +8,22 @@ function leadingTerm(x: number, y: number, a: number, b: number): number {
   return Math.sqrt((a / (2 * Math.PI)) * (b / n)) * Math.exp(exponent);
 }
 
-/** a·I_x(a, b)/leadingTerm as a continued fraction, quick for x < (a + 1)/(a + b + 2). */
-function fraction(x: number, a: number, b: number): number {
+/**
+ * leadingTerm/I_x(a, b) as a continued fraction, quick for x < (a + 1)/(a + b + 2). It needs y as well as x: 1 − y alone
+ * would lose the digits of a small x that decide where b is large.
+ */
+function fraction(x: number, y: number, a: number, b: number): number {
   const tiny = 1e-300;
-  let c = 1;
-  let d = 1 / nonZero(1 - ((a + b) * x) / (a + 1), tiny);
-  let h = d;
-  for (let m = 1; m < 1_000_000; m++) {
-    const even = (m * (b - m) * x) / ((a + 2 * m - 1) * (a + 2 * m));
-    d = 1 / nonZero(1 + even * d, tiny);
-    c = nonZero(1 + even / c, tiny);
-    h *= d * c;
-    const odd = (-(a + m) * (a + b + m) * x) / ((a + 2 * m) * (a + 2 * m + 1));
-    d = 1 / nonZero(1 + odd * d, tiny);
-    c = nonZero(1 + odd / c, tiny);
+  const lambda = a * y - b * x;
+  let h = nonZero((a * (lambda + 1)) / (a + 1), tiny);
+  let c = h;
+  let d = 0;
+  for (let n = 1; n < 1_000_000; n++) {
+    const odd = a + 2 * n - 1;
+    const top = ((((a + n - 1) * (a + b + n - 1)) / odd) * n * (b - n) * x * x) / odd;
+    const bottom = n + (n * (b - n) * x) / odd + ((a + n) * (lambda + 1 + n * (1 + y))) / (odd + 2);
+    d = 1 / nonZero(bottom + top * d, tiny);
+    c = nonZero(bottom + top / c, tiny);
     h *= d * c;
     if (Math.abs(d * c - 1) < 2e-16) return h;
   }
@@ -40,14 +42,14 @@ function nonZero(value: number, tiny: number): number {
  *
  * @param a shape at 0, above 0
  * @param b shape at 1, above 0
- * @source NIST Digital Library of Mathematical Functions, 8.17.22
+ * @source A. R. DiDonato and A. H. Morris (1992), Algorithm 708, ACM Trans. Math. Softw. 18, 360–373, equation 9
  */
 export function betaLower(x: number, y: number, a: number, b: number): number {
   if (x <= 0) return 0;
   if (y <= 0) return 1;
   const term = leadingTerm(x, y, a, b);
-  if (x <= (a + 1) / (a + b + 2)) return (term * fraction(x, a, b)) / a;
-  return 1 - (term * fraction(y, b, a)) / b;
+  if (x <= (a + 1) / (a + b + 2)) return term / fraction(x, y, a, b);
+  return 1 - term / fraction(y, x, b, a);
 }
 
 /** Density of a beta variable, y = 1 − x; infinite at an end whose shape is below 1. */
