@@ -1,5 +1,5 @@
 /** Mean and standard deviation of every kind of distribution, in closed form. */
-import { gamma } from "simple-statistics";
+import { gamma } from "../numeric/gamma.ts";
 import { normalCdf, normalPdf } from "../numeric/normal.ts";
 import type { Distribution, Quantity } from "./study.ts";
 
