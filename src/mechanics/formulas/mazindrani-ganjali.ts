@@ -1,3 +1,4 @@
+import { gaussLegendre } from "../../numeric/gauss-legendre.ts";
 import { activeCoefficientRankineSloping } from "./rankine.ts";
 
 /*
@@ -20,27 +21,7 @@ import { activeCoefficientRankineSloping } from "./rankine.ts";
  * derived here. Angles in rad: φ′ in [0, π/3], β in [0, π/4]; stresses in kPa.
  */
 
-/** Nodes and weights of the 16-point Gauss–Legendre rule on (−1, 1), positive half; from memory, checked by a test. */
-const node: Float64Array = Float64Array.of(
-  0.09501250983763744,
-  0.2816035507792589,
-  0.45801677765722737,
-  0.6178762444026438,
-  0.755404408355003,
-  0.8656312023878318,
-  0.9445750230732326,
-  0.9894009349916499,
-);
-const weight: Float64Array = Float64Array.of(
-  0.1894506104550685,
-  0.18260341504492358,
-  0.16915651939500254,
-  0.14959598881657674,
-  0.12462897125553388,
-  0.09515851168249279,
-  0.062253523938647894,
-  0.027152459411754096,
-);
+const { nodes, weights } = gaussLegendre(16);
 
 /** kPa; less than this counts as none, so that products of it do not underflow. */
 const leastCohesion = 1e-100;
@@ -240,10 +221,10 @@ function meanWithActiveState(
   let sum = 0;
   let sumOfWeights = 0;
   for (let i = 0; i < 16; i++) {
-    const u = i < 8 ? (1 - node[i]) / 2 : (1 + node[i - 8]) / 2;
+    const u = (1 + nodes[i]) / 2;
     const at = from + u * (to - from);
     const xi = inT ? (Math.sin(at - from) * Math.sin(at + from)) / whole : (u * (at + from)) / (to + from);
-    const w = weight[i & 7] * (inT ? Math.sin(at) * Math.cos(at) : at); // ds = 2 y dy
+    const w = weights[i] * (inT ? Math.sin(at) * Math.cos(at) : at); // ds = 2 y dy
     const step = xi * (sb - sa);
     const p = pressureAt(sa + step, sa - turning + step, c, sinPhi, cosPhi, sinBeta, cosBeta);
     sum += w * p * (h0 + h1 * xi);

@@ -27,9 +27,12 @@ function momentShape(a: number, height: number): number {
  * @source Boussinesq (1885), integrated along the line and doubled
  */
 export function lineLoadPressure(force: number, distance: number, depth: number): number {
-  if (!(depth > 0 && distance > 0)) return 0;
-  const square = distance * distance + depth * depth;
-  return ((4 * force) / Math.PI) * (distance / square) * (distance / square) * depth;
+  const larger = Math.max(distance, depth);
+  if (!(Math.min(distance, depth) > 0)) return 0;
+  const a = distance / larger;
+  const s = depth / larger;
+  const square = a * a + s * s;
+  return (((4 * force) / Math.PI) * a * a * s) / (square * square * larger);
 }
 
 /**
@@ -59,7 +62,9 @@ export function lineLoadMoment(force: number, distance: number, height: number):
 
 /** atan(a/s) − a s/(a² + s²), rad: 0 at a = 0, π/2 at s = 0 with a > 0. */
 function stripShape(a: number, s: number): number {
-  return a > 0 ? Math.atan2(a, s) - (a * s) / (a * a + s * s) : 0;
+  if (!(a > 0)) return 0;
+  const ratio = Math.min(a, s) / Math.max(a, s);
+  return Math.atan2(a, s) - ratio / (1 + ratio * ratio);
 }
 
 /**
