@@ -12,9 +12,9 @@ import { activeCoefficientMononobeOkabe } from "./mononobe-okabe.ts";
  * for bit, so that the earthquake increment vanishes with kh; cos(δ + θ) is not taken below cos 89°, as there.
  *
  * @param frictionAngle φ′, rad, in [0, π/3]
- * @param wallFriction δ, rad, in [0, π/4]
- * @param backFaceInclination θ from the vertical, rad, in (−π/4, π/4]; positive: the foot reaches under the retained soil
- * @param backfillSlope β, rad, in [0, π/4]
+ * @param wallFriction δ, rad, in [0, π/3]
+ * @param backFaceInclination θ from the vertical, rad, in (−π/2, π/2); positive: the foot reaches under the retained soil
+ * @param backfillSlope β, rad, in [0, π/3]
  * @returns Ka, dimensionless, 0 or more
  * @source Coulomb (1776); closed form of Müller-Breslau (1906), Erddruck auf Stützmauern
  * @example activeCoefficientCoulomb(Math.PI / 6, Math.PI / 9, 0, 0) // 0.2973

@@ -9,7 +9,7 @@ import { activeCoefficientRankineSloping } from "./rankine.ts";
  *     = 4 [c′ cos φ′ + s cos β sin(φ′ + β)] [c′ cos φ′ + s cos β sin(φ′ − β)]
  *
  * with the vertical effective stress s for the authors' γz. p turns positive at s* = 2 c′ tan(45° + φ′/2), whatever the
- * slope. Where R < 0 (β > φ′ and s beyond sLimit = c′ cos φ′ / (cos β sin(β − φ′))) there is no active state: √R is
+ * slope (with β above 45° and little friction, 2 cos²β < cos²φ′, it may stay negative, or end again). Where R < 0 (β > φ′ and s beyond sLimit = c′ cos φ′ / (cos β sin(β − φ′))) there is no active state: √R is
  * taken as 0 there. At c′ = 0 the pressure is K s with the coefficient of `rankine.ts`, which is the limit c′ → 0 where
  * β ≤ φ′; where β > φ′ the two formulas do not meet with their roots at 0 (K = cos β against
  * cos β (2 cos²β/cos²φ′ − 1)), so the pressure jumps at c′ = 0 on a slope that is unstable anyway, and marked.
@@ -18,7 +18,7 @@ import { activeCoefficientRankineSloping } from "./rankine.ts";
  *   p = cos β cos²φ′ (s − s*) (s + 2 c′ tan(45° − φ′/2)) / (L + √R)
  *
  * Source: Mazindrani and Ganjali (1997), J. Geotech. Geoenviron. Eng. 123(2), 110–112; factors and integrals of R
- * derived here. Angles in rad: φ′ in [0, π/3], β in [0, π/4]; stresses in kPa.
+ * derived here. Angles in rad: φ′ and β in [0, π/3]; stresses in kPa.
  */
 
 const { nodes, weights } = gaussLegendre(16);
@@ -58,7 +58,7 @@ function pressureAt(
  * @param verticalStress s, kPa; below 0 taken as 0
  * @param cohesion c′, kPa, 0 or more
  * @param frictionAngle φ′, rad, in [0, π/3]
- * @param backfillSlope β, rad, in [0, π/4]
+ * @param backfillSlope β, rad, in [0, π/3]
  * @returns p, kPa; horizontal part p cos β, vertical part p sin β
  * @source Mazindrani and Ganjali (1997), J. Geotech. Geoenviron. Eng. 123(2), 110–112
  */
@@ -150,21 +150,29 @@ function weighted(
   const sinBeta = Math.sin(beta);
   const cosBeta = Math.cos(beta);
   const turning = turningStress(c, sinPhi, cosPhi);
+  const cohesive = c > leastCohesion;
+  // p with the root at 0 is start + slope·s; where it falls it ends at −start/slope, and may never have been positive
+  const slope = (cosBeta * (2 * cosBeta * cosBeta - cosPhi * cosPhi)) / (cosPhi * cosPhi);
+  const start = (2 * c * cosBeta * sinPhi) / cosPhi;
+  if (cohesive && start + slope * turning < 0) return 0;
+  const end = cohesive && slope < 0 ? -start / slope : Infinity;
+
   const low = Math.min(s0, s1);
-  const sb = Math.max(s0, s1);
-  if (!(sb > turning && length > 0)) return 0;
+  const high = Math.max(s0, s1);
   const sa = Math.max(low, turning);
-  const positive = sa > low ? length * ((sb - sa) / (sb - low)) : length;
-  const h0 = moment ? (s1 >= s0 ? positive : length - positive) : 1;
+  const sb = Math.min(high, end);
+  if (!(high > turning && sb >= sa && length > 0)) return 0;
+  const from = sa > low ? (sa - low) / (high - low) : 0;
+  const to = sb < high ? (sb - low) / (high - low) : 1;
+  const positive = length * (to - from);
+  const h0 = moment ? length * (s1 >= s0 ? 1 - from : from) : 1;
   const h1 = moment ? (s1 >= s0 ? -positive : positive) : 0;
-  if (!(c > leastCohesion)) return positive * activeCoefficientRankineSloping(phi, beta) * meanOfLine(sa, sb, h0, h1);
+  if (!cohesive) return positive * activeCoefficientRankineSloping(phi, beta) * meanOfLine(sa, sb, h0, h1);
 
   const limit =
     sinBeta * cosPhi > cosBeta * sinPhi ? (c * cosPhi) / (cosBeta * (sinBeta * cosPhi - cosBeta * sinPhi)) : Infinity;
   if (sb <= limit)
     return positive * meanWithActiveState(sa, sb, turning, c, sinPhi, cosPhi, sinBeta, cosBeta, limit, h0, h1);
-  const slope = (cosBeta * (2 * cosBeta * cosBeta - cosPhi * cosPhi)) / (cosPhi * cosPhi);
-  const start = (2 * c * cosBeta * sinPhi) / cosPhi;
   if (sa >= limit) return positive * meanOfLine(start + slope * sa, start + slope * sb, h0, h1);
   const share = (limit - sa) / (sb - sa);
   const above = meanWithActiveState(sa, limit, turning, c, sinPhi, cosPhi, sinBeta, cosBeta, limit, h0, h1 * share);

@@ -49,12 +49,12 @@ export function submergedMassRatio(saturatedUnitWeight: number, waterUnitWeight:
  *
  * computed with cos(δ + θ + ψ) drawn into the bracket. The thrust is ½ γ H² (1 − kv) KAE, inclined δ to the normal of
  * the face. Where β + ψ > φ′ there is no solution: the root is taken as 0, and the caller marks the evaluation.
- * cos(δ + θ + ψ) and cos ψ are not taken below cos 89°, so the result is finite (below 7e3) for δ, θ, β up to 45°.
+ * cos(δ + θ + ψ) and cos ψ are not taken below cos 89°, so the result is finite (below 7e3 for θ up to 45°).
  *
  * @param frictionAngle φ′, rad, in [0, π/3]
- * @param wallFriction δ, rad, in [0, π/4]
- * @param backFaceInclination θ from the vertical, rad, in (−π/4, π/4]; positive: the foot reaches under the retained soil
- * @param backfillSlope β, rad, in [0, π/4]
+ * @param wallFriction δ, rad, in [0, π/3]
+ * @param backFaceInclination θ from the vertical, rad, in (−π/2, π/2); positive: the foot reaches under the retained soil
+ * @param backfillSlope β, rad, in [0, π/3]
  * @param seismicAngle ψ, rad, in [0, 89°]
  * @returns KAE, dimensionless, 0 or more
  * @source Okabe (1926); Mononobe and Matsuo (1929); in the form of EN 1998-5:2004, Annex E, E.4

@@ -55,7 +55,7 @@ test("more friction never raises it, a steeper slope never lowers it", () => {
 
 test("it is finite and not negative over the whole physical range", () => {
   fc.assert(
-    fc.property(degrees(0, 60), degrees(0, 45), degrees(0, 45), degrees(0, 45), (phi, delta, theta, beta) => {
+    fc.property(degrees(0, 60), degrees(0, 60), degrees(0, 45), degrees(0, 60), (phi, delta, theta, beta) => {
       const k = activeCoefficientCoulomb(phi, delta, theta, beta);
       expect(k >= 0 && k < 200).toBe(true);
     }),

@@ -13,7 +13,7 @@ const number = (min: number, max: number): fc.Arbitrary<number> => fc.double({ m
 const stress = fc.oneof(number(0, 300), fc.constant(0), number(-50, 3000));
 const cohesion = fc.oneof(number(0.01, 60), number(0, 1000), fc.constant(0));
 const friction = fc.oneof(number(0, 60), fc.constantFrom(0, 30, 60)).map(radians);
-const slope = fc.oneof(number(0, 45), fc.constantFrom(0, 30, 45)).map(radians);
+const slope = fc.oneof(number(0, 60), fc.constantFrom(0, 30, 45, 60)).map(radians);
 const ground = fc.tuple(stress, stress, cohesion, friction, slope);
 
 /** Allowance for what the rounding of stress and angles moves by itself. */
@@ -23,14 +23,13 @@ test("force and moment are the integrals of the positive pressure", () => {
   fc.assert(
     fc.property(ground, ([s0, s1, c, phi, beta]) => {
       const length = 3;
-      const splits =
-        s0 === s1
-          ? []
-          : [
-              0,
-              2 * c * Math.tan(Math.PI / 4 + phi / 2),
-              (c * Math.cos(phi)) / (Math.cos(beta) * Math.sin(beta - phi)),
-            ].map((s) => (s - s0) / (s1 - s0));
+      const stressesOfKinks = [
+        0,
+        2 * c * Math.tan(Math.PI / 4 + phi / 2), // turns positive
+        (c * Math.cos(phi)) / (Math.cos(beta) * Math.sin(beta - phi)), // the active state ends
+        (2 * c * Math.cos(phi) * Math.sin(phi)) / (Math.cos(phi) ** 2 - 2 * Math.cos(beta) ** 2), // positive no longer
+      ];
+      const splits = s0 === s1 ? [] : stressesOfKinks.map((s) => (s - s0) / (s1 - s0));
       const p = (x: number): number => Math.max(slopingCohesivePressure(s0 + (s1 - s0) * x, c, phi, beta), 0);
       const force = length * tanhSinhSplit(p, splits);
       const moment = length ** 2 * tanhSinhSplit((x) => p(x) * (1 - x), splits);

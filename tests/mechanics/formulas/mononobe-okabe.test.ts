@@ -51,9 +51,9 @@ test("beyond the limit of equilibrium the root is 0, and the value there is met 
 
 test("the largest seismic angle and inclinations keep the coefficient below 7e3", () => {
   for (let phi = 0; phi <= 60; phi += 5)
-    for (let delta = 0; delta <= 45; delta += 5)
+    for (let delta = 0; delta <= 60; delta += 5)
       for (let theta = 0; theta <= 45; theta += 5)
-        for (let beta = 0; beta <= 45; beta += 5) {
+        for (let beta = 0; beta <= 60; beta += 5) {
           const k = activeCoefficientMononobeOkabe(
             radians(phi),
             radians(delta),
