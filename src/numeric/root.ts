@@ -23,7 +23,8 @@ export function findRoot(f: (x: number) => number, low: number, high: number, to
   let b = high;
   let fa = f(a);
   let fb = f(b);
-  if (!(Math.sign(fa) * Math.sign(fb) <= 0)) throw new RangeError(`no change of sign between f(${a}) = ${fa} and f(${b}) = ${fb}`);
+  if (!(Math.sign(fa) * Math.sign(fb) <= 0))
+    throw new RangeError(`no change of sign between f(${a}) = ${fa} and f(${b}) = ${fb}`);
   let c = a;
   let fc = fa;
   let step = b - a;
@@ -88,7 +89,8 @@ export function findRisingRoot(f: RisingFunction, low: number, high: number, sta
     if (value === 0) return { x, converged: true, iterations };
     if (value < 0) left = x;
     else right = x;
-    let step = -value / f.slope(x, value);
+    const slope = f.slope(x, value);
+    let step = Number.isFinite(slope) ? -value / slope : Number.NaN;
     const size = Math.abs(step);
     if (size <= leastStep(x, 0)) return { x: x + step, converged: true, iterations };
     // beyond the bracket, not a number, or not getting on: halve instead
