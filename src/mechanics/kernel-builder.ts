@@ -1,3 +1,4 @@
+import { type Formula, loopOf } from "./columnwise.ts";
 import type {
   Coefficient,
   Columns,
@@ -21,8 +22,6 @@ export interface InputField {
   readonly fixed?: number;
   readonly mean: number;
 }
-
-type Formula = (...values: number[]) => number;
 
 /**
  * Puts a kernel together, one stage after the other, and folds away what does not vary: a stage that reads constants alone is
@@ -209,39 +208,41 @@ export class KernelBuilder {
   }
 }
 
-/** One loop over a formula of one to seven columns; spelled out by number of columns, so that nothing is allocated per sample. */
 function formulaStage(name: string, formula: Formula, slots: readonly Slot[], into: Slot): Stage {
-  const at = (place: number): Slot => slots[Math.min(place, slots.length - 1)];
   if (slots.length > 7) throw new RangeError(`${name}: a formula takes at most 7 columns, not ${slots.length}`);
+  const loop = loopOf(formula);
+  const [a, b, c, d, e, f, g] = Array.from({ length: 7 }, (_, place) => slots[Math.min(place, slots.length - 1)]);
   return {
     name,
     reads: slots,
     writes: [into],
-    run(c, count) {
-      const out = c[into];
-      const [p0, p1, p2, p3, p4, p5, p6] = [c[at(0)], c[at(1)], c[at(2)], c[at(3)], c[at(4)], c[at(5)], c[at(6)]];
-      for (let i = 0; i < count; i++) out[i] = formula(p0[i], p1[i], p2[i], p3[i], p4[i], p5[i], p6[i]);
+    run(k, count) {
+      loop(k[into], count, k[a], k[b], k[c], k[d], k[e], k[f], k[g]);
     },
   };
 }
 
+/** Adds four columns at a time: one pass over the block for what would be four. */
 function sumStage(
   name: string,
   terms: readonly { readonly slot: Slot; readonly sign: 1 | -1 }[],
   constant: number,
   into: Slot,
 ): Stage {
+  const count4 = Math.ceil(terms.length / 4);
+  const slots = Array.from({ length: 4 * count4 }, (_, place) => terms[Math.min(place, terms.length - 1)].slot);
+  const signs = Array.from({ length: 4 * count4 }, (_, place) => (place < terms.length ? terms[place].sign : 0));
   return {
     name,
     reads: terms.map((term) => term.slot),
     writes: [into],
-    run(c, count) {
-      const out = c[into];
-      for (let i = 0; i < count; i++) out[i] = constant;
-      for (let t = 0; t < terms.length; t++) {
-        const column = c[terms[t].slot];
-        if (terms[t].sign === 1) for (let i = 0; i < count; i++) out[i] += column[i];
-        else for (let i = 0; i < count; i++) out[i] -= column[i];
+    run(k, count) {
+      const y = k[into];
+      for (let t = 0; t < slots.length; t += 4) {
+        const [a, b, c, d] = [k[slots[t]], k[slots[t + 1]], k[slots[t + 2]], k[slots[t + 3]]];
+        const [p, q, r, s] = [signs[t], signs[t + 1], signs[t + 2], signs[t + 3]];
+        if (t === 0) for (let i = 0; i < count; i++) y[i] = constant + p * a[i] + q * b[i] + r * c[i] + s * d[i];
+        else for (let i = 0; i < count; i++) y[i] += p * a[i] + q * b[i] + r * c[i] + s * d[i];
       }
     },
   };

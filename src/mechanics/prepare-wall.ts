@@ -8,6 +8,7 @@
 import { distributionMean } from "../study/moments.ts";
 import { quantitiesOf } from "../study/quantities.ts";
 import type { Study } from "../study/study.ts";
+import { columnwise } from "./columnwise.ts";
 import type { Kernel, Slot } from "./kernel.ts";
 import { type InputField, KernelBuilder } from "./kernel-builder.ts";
 import { prepareBase } from "./stages/base.ts";
@@ -156,3 +157,11 @@ function prepareFrontLevel(b: KernelBuilder, study: Study): Slot {
   b.step("Outline", slot, "z_g", "level of the ground in front above the underside", "{z}", { z: slot }, "m");
   return slot;
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(local, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = local(a[i], b[i]);
+});
+columnwise(aboveUnderside, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = aboveUnderside(a[i], b[i]);
+});

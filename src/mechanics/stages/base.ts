@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { factorCap, mark, type Slot } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import type { EarthThrust } from "./earth-thrust.ts";
@@ -204,3 +205,14 @@ function sumText(terms: readonly Term[]): [formula: string, of: Record<string, S
 export function cappedRatio(resisting: number, driving: number): number {
   return driving > 0 ? Math.min(Math.max(resisting / driving, 0), factorCap) : factorCap;
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(negative, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = negative(a[i]);
+});
+columnwise(product, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = product(a[i], b[i]);
+});
+columnwise(centroid, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = centroid(a[i], b[i]);
+});

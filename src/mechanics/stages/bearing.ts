@@ -1,4 +1,5 @@
 import type { Study } from "../../study/study.ts";
+import { columnwise } from "../columnwise.ts";
 import {
   bearingFactorNc,
   bearingFactorNgammaEn1997,
@@ -279,3 +280,59 @@ function meyerhofInclination(b: KernelBuilder, base: BaseForces, below: SoilSlot
     ],
   };
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(applied, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = applied(a[i], b[i]);
+});
+columnwise(pushing, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = pushing(a[i]);
+});
+columnwise(undrainedCapacity, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = undrainedCapacity(a[i], b[i], c[i], d[i]);
+});
+columnwise(unitWeightBelow, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = unitWeightBelow(a[i], b[i], c[i], d[i]);
+});
+columnwise(term, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = term(a[i], b[i], c[i]);
+});
+columnwise(weightTerm, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = weightTerm(a[i], b[i], c[i], d[i]);
+});
+columnwise(capacity, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = capacity(a[i], b[i], c[i], d[i]);
+});
+columnwise(cotangent, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = cotangent(a[i]);
+});
+columnwise(tangent, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = tangent(a[i]);
+});
+columnwise(loadInclination, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = loadInclination(a[i], b[i]);
+});
+columnwise(atLeast, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = atLeast(a[i]);
+});
+columnwise(undrainedInclination, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = undrainedInclination(a[i], b[i], c[i]);
+});
+columnwise(inclinationBase, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = inclinationBase(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(inclinationNq, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = inclinationNq(a[i]);
+});
+columnwise(inclinationNgamma, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = inclinationNgamma(a[i]);
+});
+columnwise(inclinationNc, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = inclinationNc(a[i], b[i], c[i]);
+});
+columnwise(meyerhofInclinationNq, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = meyerhofInclinationNq(a[i]);
+});
+columnwise(meyerhofInclinationNgamma, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = meyerhofInclinationNgamma(a[i], b[i]);
+});

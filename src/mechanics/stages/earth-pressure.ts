@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { positiveForce, positiveMoment, zeroCrossing } from "../formulas/linear-pressure.ts";
 import {
   slopingCohesiveForce,
@@ -149,8 +150,15 @@ function thrustStage(b: KernelBuilder, part: PlanePart): void {
             const length = t[i] - e[i];
             const p0 = k[i] * s0[i];
             const p1 = k[i] * s1[i];
-            f[i] = positiveForce(p0, p1, length);
-            m[i] = positiveMoment(p0, p1, length) + f[i] * e[i];
+            if (p0 >= 0 && p1 >= 0) {
+              // What positiveForce and positiveMoment give here, written out: this is the common case and it is hot.
+              const force = 0.5 * (p0 + p1) * length;
+              f[i] = force;
+              m[i] = (length * length * (2 * p0 + p1)) / 6 + force * e[i];
+            } else {
+              f[i] = positiveForce(p0, p1, length);
+              m[i] = positiveMoment(p0, p1, length) + f[i] * e[i];
+            }
           }
         },
   });
@@ -230,3 +238,8 @@ export function waterPressureBehind(
   if (crack !== undefined && level > crack) return waterUnitWeight * (top - level);
   return waterUnitWeight * (1 - gradient) * Math.max(waterLevel - level, 0);
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(stressBelow, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = stressBelow(a[i], b[i], c[i], d[i]);
+});

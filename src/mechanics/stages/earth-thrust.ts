@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { activeCoefficientCoulomb } from "../formulas/coulomb.ts";
 import { positiveCentre, positiveForce, positiveLength } from "../formulas/linear-pressure.ts";
 import { slopeUnstable } from "../formulas/mazindrani-ganjali.ts";
@@ -57,10 +58,15 @@ export function prepareEarthThrust(
     across,
     factor,
   ]);
-  const vertical = b.formula("vertical earth thrust", productOfThree, [total, along, factor]);
-  const timesZ = b.formula("vertical earth thrust times z", productOfThree, [totalMoment, along, factor]);
-  const verticalMoment =
-    plane.kind === "virtual_back"
+  const upright = b.constantOf(along) === 0;
+  const zero = b.constant(0);
+  const vertical = upright ? zero : b.formula("vertical earth thrust", productOfThree, [total, along, factor]);
+  const timesZ = upright
+    ? zero
+    : b.formula("vertical earth thrust times z", productOfThree, [totalMoment, along, factor]);
+  const verticalMoment = upright
+    ? zero
+    : plane.kind === "virtual_back"
       ? b.formula("moment of the vertical earth thrust", product, [vertical, o.width])
       : b.formula("moment of the vertical earth thrust", momentOnBack, [
           vertical,
@@ -371,3 +377,38 @@ export function prepareSlopeMarks(
     });
   }
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(productOfThree, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = productOfThree(a[i], b[i], c[i]);
+});
+columnwise(product, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = product(a[i], b[i]);
+});
+columnwise(momentOnBack, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = momentOnBack(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(massRatio, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = massRatio(a[i]);
+});
+columnwise(dryRatio, (y, n) => {
+  for (let i = 0; i < n; i++) y[i] = dryRatio();
+});
+columnwise(quakeRise, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = quakeRise(a[i], b[i], c[i]);
+});
+columnwise(incrementOf, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = incrementOf(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(alongSlope, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = alongSlope(a[i], b[i]);
+});
+columnwise(atSixTenths, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = atSixTenths(a[i], b[i]);
+});
+columnwise(seismicAngle, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = seismicAngle(a[i], b[i], c[i]);
+});
+columnwise(activeCoefficientMononobeOkabe, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = activeCoefficientMononobeOkabe(a[i], b[i], c[i], d[i], e[i]);
+});

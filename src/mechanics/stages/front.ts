@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { positiveForce, positiveMoment } from "../formulas/linear-pressure.ts";
 import { passiveCoefficientRankine } from "../formulas/rankine.ts";
 import { type Slot, waterUnitWeight } from "../kernel.ts";
@@ -172,3 +173,23 @@ export function preparePassive(b: KernelBuilder, front: FrontGround): Passive | 
   );
   return { force, moment };
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(waterInSoil, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = waterInSoil(a[i], b[i]);
+});
+columnwise(less, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = less(a[i], b[i]);
+});
+columnwise(positiveFrontStress, (y, n, a, b, c, d, e, f) => {
+  for (let i = 0; i < n; i++) y[i] = positiveFrontStress(a[i], b[i], c[i], d[i], e[i], f[i]);
+});
+columnwise(surchargeInFront, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = surchargeInFront(a[i], b[i]);
+});
+columnwise(negative, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = negative(a[i]);
+});
+columnwise(passiveCoefficientRankine, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = passiveCoefficientRankine(a[i]);
+});

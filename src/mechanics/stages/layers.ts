@@ -1,4 +1,5 @@
 import type { Study } from "../../study/study.ts";
+import { columnwise } from "../columnwise.ts";
 import { type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 
@@ -70,3 +71,17 @@ export const clamp = (x: number, lowest: number, highest: number): number => Mat
 /** Vertical effective stress gained per metre of depth below water: γ_sat − γw (1 − i). */
 export const buoyantUnitWeight = (saturated: number, gradient: number): number =>
   saturated - waterUnitWeight * (1 - gradient);
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(plusTwo, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = plusTwo(a[i]);
+});
+columnwise(localLevel, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = localLevel(a[i], b[i]);
+});
+columnwise(clamp, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = clamp(a[i], b[i], c[i]);
+});
+columnwise(buoyantUnitWeight, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = buoyantUnitWeight(a[i], b[i]);
+});

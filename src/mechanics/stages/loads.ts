@@ -1,4 +1,5 @@
 import type { Study } from "../../study/study.ts";
+import { columnwise } from "../columnwise.ts";
 import {
   lineLoadMoment,
   lineLoadPressure,
@@ -190,3 +191,50 @@ function pushLoad(
   );
   b.step("Loads", about, "P_load·z", "its moment about the underside", "moment of the same diagram", {}, "kNm/m");
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(surchargeOnBack, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = surchargeOnBack(a[i], b[i], c[i]);
+});
+columnwise(runOverHeel, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = runOverHeel(a[i], b[i]);
+});
+columnwise(product, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = product(a[i], b[i]);
+});
+columnwise(middle, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = middle(a[i], b[i]);
+});
+columnwise(sum, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = sum(a[i], b[i]);
+});
+columnwise(behindPlane, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = behindPlane(a[i], b[i], c[i]);
+});
+columnwise(overHeelWidth, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = overHeelWidth(a[i], b[i], c[i], d[i]);
+});
+columnwise(overHeelMiddle, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = overHeelMiddle(a[i], b[i], c[i]);
+});
+columnwise(zeroOnHeel, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = zeroOnHeel(a[i], b[i], c[i], d[i]);
+});
+columnwise(onHeelAlone, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = onHeelAlone(a[i], b[i], c[i], d[i]);
+});
+columnwise(atX, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = atX(a[i], b[i]);
+});
+columnwise(stripLoadThrust, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = stripLoadThrust(a[i], b[i], c[i], d[i]);
+});
+columnwise(stripLoadMoment, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = stripLoadMoment(a[i], b[i], c[i], d[i]);
+});
+columnwise(lineLoadThrust, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = lineLoadThrust(a[i], b[i], c[i]);
+});
+columnwise(lineLoadMoment, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = lineLoadMoment(a[i], b[i], c[i]);
+});

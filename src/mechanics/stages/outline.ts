@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import type { Slot } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 
@@ -113,3 +114,20 @@ export function prepareOutline(b: KernelBuilder): Outline {
     sloping: !b.isCertainly("ground.behind.slope", 0),
   };
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(frontRunOf, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = frontRunOf(a[i], b[i], c[i]);
+});
+columnwise(height, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = height(a[i], b[i]);
+});
+columnwise(crestOfBack, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = crestOfBack(a[i], b[i]);
+});
+columnwise(ratio, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = ratio(a[i], b[i]);
+});
+columnwise(topOfVirtualBack, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = topOfVirtualBack(a[i], b[i], c[i], d[i]);
+});

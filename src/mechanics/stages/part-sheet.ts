@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import type { Slot } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import { type PlanePart, pressureAt } from "./earth-pressure.ts";
@@ -124,3 +125,8 @@ function pressureSlots(b: KernelBuilder, part: PlanePart): readonly [Slot, Slot]
   });
   return [top, bottom];
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(centroid, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = centroid(a[i], b[i]);
+});

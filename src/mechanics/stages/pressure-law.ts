@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { atRestCoefficient } from "../formulas/at-rest.ts";
 import { activeCoefficientCoulomb } from "../formulas/coulomb.ts";
 import {
@@ -167,3 +168,41 @@ function kinkAt(b: KernelBuilder, slope: Slot): readonly number[] {
   const value = b.constantOf(slope);
   return value === undefined || value === 0 ? [] : [value];
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(cosOfSum, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = cosOfSum(a[i], b[i]);
+});
+columnwise(sinOfSum, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = sinOfSum(a[i], b[i]);
+});
+columnwise(doubledRoot, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = doubledRoot(a[i], b[i]);
+});
+columnwise(doubled, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = doubled(a[i], b[i]);
+});
+columnwise(Math.tan, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = Math.tan(a[i]);
+});
+columnwise(Math.cos, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = Math.cos(a[i]);
+});
+columnwise(Math.sin, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = Math.sin(a[i]);
+});
+columnwise(atRestCoefficient, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = atRestCoefficient(a[i], b[i], c[i]);
+});
+columnwise(activeCoefficientCoulomb, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = activeCoefficientCoulomb(a[i], b[i], c[i], d[i]);
+});
+columnwise(activeCoefficientRankine, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = activeCoefficientRankine(a[i]);
+});
+columnwise(rootActiveCoefficientRankine, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = rootActiveCoefficientRankine(a[i]);
+});
+columnwise(activeCoefficientRankineSloping, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = activeCoefficientRankineSloping(a[i], b[i]);
+});

@@ -1,4 +1,5 @@
 import type { Study } from "../../study/study.ts";
+import { columnwise } from "../columnwise.ts";
 import { factorCap, mark, type Slot } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import { type BaseForces, cappedRatio } from "./base.ts";
@@ -210,3 +211,23 @@ export function prepareEccentricity(b: KernelBuilder, o: Outline, base: BaseForc
     formula: "{resisting}/{driving}",
   });
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(undrainedResistance, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = undrainedResistance(a[i], b[i], c[i], d[i]);
+});
+columnwise(tanOfShare, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = tanOfShare(a[i], b[i]);
+});
+columnwise(compressedLength, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = compressedLength(a[i], b[i]);
+});
+columnwise(drainedResistance, (y, n, a, b, c, d, e, f) => {
+  for (let i = 0; i < n; i++) y[i] = drainedResistance(a[i], b[i], c[i], d[i], e[i], f[i]);
+});
+columnwise(shareOfWidth, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = shareOfWidth(a[i], b[i]);
+});
+columnwise(offCentre, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = offCentre(a[i], b[i]);
+});

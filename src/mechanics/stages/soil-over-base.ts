@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { heelArea, heelMomentX, heelMomentZ, toeArea, toeMomentX, toeMomentZ } from "../formulas/heel-area.ts";
 import { type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
@@ -196,3 +197,41 @@ export function prepareToeSoil(
 
 /** Free water stands above the ground up to the water level: γw (water − ground), not below 0. */
 const freeWater = (water: number, ground: number): number => waterUnitWeight * Math.max(water - ground, 0);
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(dry, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = dry(a[i], b[i], c[i]);
+});
+columnwise(soaked, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = soaked(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(difference, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = difference(a[i], b[i]);
+});
+columnwise(wetArea, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = wetArea(a[i], b[i], c[i]);
+});
+columnwise(armOf, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = armOf(a[i], b[i]);
+});
+columnwise(freeWater, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = freeWater(a[i], b[i]);
+});
+columnwise(heelArea, (y, n, a, b, c, d, e, f, g) => {
+  for (let i = 0; i < n; i++) y[i] = heelArea(a[i], b[i], c[i], d[i], e[i], f[i], g[i]);
+});
+columnwise(heelMomentX, (y, n, a, b, c, d, e, f, g) => {
+  for (let i = 0; i < n; i++) y[i] = heelMomentX(a[i], b[i], c[i], d[i], e[i], f[i], g[i]);
+});
+columnwise(heelMomentZ, (y, n, a, b, c, d, e, f, g) => {
+  for (let i = 0; i < n; i++) y[i] = heelMomentZ(a[i], b[i], c[i], d[i], e[i], f[i], g[i]);
+});
+columnwise(toeArea, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = toeArea(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(toeMomentX, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = toeMomentX(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(toeMomentZ, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = toeMomentZ(a[i], b[i], c[i], d[i], e[i]);
+});

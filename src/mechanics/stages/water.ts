@@ -1,3 +1,4 @@
+import { columnwise } from "../columnwise.ts";
 import { type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import { addWeight, type Ledger } from "./ledger.ts";
@@ -281,3 +282,59 @@ export function prepareWaterFront(b: KernelBuilder, ledger: Ledger, ponds: Ponds
     "kN/m",
   );
 }
+
+// Loops written out one by one, so that each is compiled for its own formula.
+columnwise(localLevel, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = localLevel(a[i], b[i]);
+});
+columnwise(between, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = between(a[i], b[i]);
+});
+columnwise(hydraulicGradient, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = hydraulicGradient(a[i], b[i], c[i], d[i]);
+});
+columnwise(depthBelowUnderside, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = depthBelowUnderside(a[i]);
+});
+columnwise(headAtHeel, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = headAtHeel(a[i], b[i]);
+});
+columnwise(headAtToe, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = headAtToe(a[i], b[i], c[i]);
+});
+columnwise(upliftForce, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = upliftForce(a[i], b[i], c[i]);
+});
+columnwise(upliftMoment, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = upliftMoment(a[i], b[i], c[i]);
+});
+columnwise(negative, (y, n, a) => {
+  for (let i = 0; i < n; i++) y[i] = negative(a[i]);
+});
+columnwise(crackedWaterThrust, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = crackedWaterThrust(a[i], b[i], c[i], d[i]);
+});
+columnwise(thrustBehind, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = thrustBehind(a[i], b[i]);
+});
+columnwise(crackedWaterMoment, (y, n, a, b, c, d) => {
+  for (let i = 0; i < n; i++) y[i] = crackedWaterMoment(a[i], b[i], c[i], d[i]);
+});
+columnwise(third, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = third(a[i], b[i]);
+});
+columnwise(product, (y, n, a, b) => {
+  for (let i = 0; i < n; i++) y[i] = product(a[i], b[i]);
+});
+columnwise(batterMoment, (y, n, a, b, c, d, e) => {
+  for (let i = 0; i < n; i++) y[i] = batterMoment(a[i], b[i], c[i], d[i], e[i]);
+});
+columnwise(safeRatio, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = safeRatio(a[i], b[i], c[i]);
+});
+columnwise(thrustFront, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = thrustFront(a[i], b[i], c[i]);
+});
+columnwise(momentFront, (y, n, a, b, c) => {
+  for (let i = 0; i < n; i++) y[i] = momentFront(a[i], b[i], c[i]);
+});
