@@ -64,7 +64,7 @@ function targetWords(read: TreeReader, path: string): Pick<Target, "period" | "r
   if (named?.period !== undefined && given !== undefined && given !== named.period) {
     read.findings.problem(
       `${path}.period`,
-      `${named.name} is a target for ${named.period} years, not ${given}`,
+      `${named.name} is a target for a period of ${named.period}, not ${given}`,
       "leave period out, or name another target",
     );
   }

@@ -108,7 +108,7 @@ function buildInvestigation(read: TreeReader, path: string): Investigation {
   const informs = valueAt(read.tree, `${path}.informs`);
   const entries = Array.isArray(informs) ? informs.map((_, k) => `${path}.informs.${k}`) : [path];
   if (typeof informs === "string" && !read.has(`${path}.tests`)) {
-    read.findings.problem(path, "tests is missing: how many tests are made", "for example tests: 6");
+    read.findings.problem(`${path}.tests`, "is missing: how many tests are made", "for example tests: 6");
   }
   if (Array.isArray(informs)) {
     for (const key of ["tests", "error", "transformation"]) {

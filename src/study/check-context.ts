@@ -2,6 +2,7 @@
 import type { TreeReader } from "./build-study.ts";
 import { meanOf } from "./moments.ts";
 import { brief } from "./read-number.ts";
+import { withUnit } from "./resolve-distribution.ts";
 import type { Quantity, Study } from "./study.ts";
 import { type Dimension, displayUnit, plainUnit } from "./units.ts";
 
@@ -29,10 +30,8 @@ export function checkContext(study: Study, read: TreeReader, changed: boolean): 
     keyProblem,
     notice,
     mean: (quantity) => (quantity === undefined ? Number.NaN : meanOf(quantity)),
-    say: (value, dimension) => {
-      const unit = plainUnit(dimension, study.units);
-      return `${brief(value * displayUnit(dimension, study.units).factor)}${unit === "" ? "" : ` ${unit}`}`;
-    },
+    say: (value, dimension) =>
+      withUnit(brief(value * displayUnit(dimension, study.units).factor), plainUnit(dimension, study.units)),
   };
 }
 

@@ -23,7 +23,7 @@ export function checkEvidence(context: CheckContext, tryChange: TryChange): void
 }
 
 function checkResults(context: CheckContext, raw: Record<string, unknown>, path: string): void {
-  const quantity = checkLearnable(context, raw.of as string, `${path}.of`, raw.error !== undefined);
+  const quantity = checkLearnable(context, raw.of as string, `${path}.of`, `${path}.error`);
   if (quantity === undefined) return;
   const results = raw.results as unknown[];
   noteDoubleUse(context, quantity, results, path);
@@ -93,7 +93,9 @@ function relay(context: CheckContext, changes: Record<string, unknown>, path: st
     tryChange(changes);
   } catch (error) {
     if (!(error instanceof StudyError)) throw error;
+    const known = new Set(context.read.findings.problems.map((problem) => `${problem.path}: ${problem.message}`));
     for (const { path: inside, message, hint } of error.problems) {
+      if (known.has(`${inside}: ${message}`)) continue; // wrong without the change already
       const cause = Object.keys(changes).find(
         (name) => inside === name || inside.startsWith(`${name}.`) || name.startsWith(`${inside}.`),
       );
@@ -124,19 +126,18 @@ export function checkDecision(context: CheckContext, tryChange: TryChange): void
       context.notice(path, "the first option is the base case, yet it changes the study");
     relay(context, { ...option.change }, `${path}.change`, tryChange);
   }
-  for (const [i, investigation] of decision.investigations.entries()) {
-    const path = `decision.investigations.${i}.informs`;
-    const listed = Array.isArray(valueAt(context.read.tree, path));
-    for (const [k, informed] of investigation.informs.entries()) {
-      const where = listed ? `${path}.${k}.path` : path;
-      const quantity = checkLearnable(
-        context,
-        informed.path,
-        where,
-        context.read.has(listed ? `${path}.${k}.error` : `decision.investigations.${i}.error`),
-      );
-      if (quantity?.scatter && informed.error !== undefined) noteSmallError(context, quantity, informed.error, where);
-    }
+  for (const [i] of decision.investigations.entries()) checkInvestigation(context, i);
+}
+
+function checkInvestigation(context: CheckContext, i: number): void {
+  const path = `decision.investigations.${i}`;
+  const listed = Array.isArray(valueAt(context.read.tree, `${path}.informs`));
+  for (const [k, informed] of context.study.decision!.investigations[i]!.informs.entries()) {
+    const entry = listed ? `${path}.informs.${k}` : path;
+    const where = listed ? `${entry}.path` : `${path}.informs`;
+    const quantity = checkLearnable(context, informed.path, where, `${entry}.error`);
+    if (quantity?.scatter && informed.error !== undefined)
+      noteSmallError(context, quantity, informed.error, `${entry}.error`);
   }
 }
 

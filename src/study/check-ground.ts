@@ -97,7 +97,7 @@ function checkBelow({ study, read, problem, keyProblem, mean, say }: CheckContex
       "soil and layers are both given; one of them is needed",
       "the first of the layers is the soil below the base",
     );
-  } else if (read.has(path) && !read.has(`${path}.soil`) && !read.has(`${path}.layers`)) {
+  } else if (isRecord(valueAt(read.tree, path)) && !read.has(`${path}.soil`) && !read.has(`${path}.layers`)) {
     problem(path, "names no soil; soil or layers is needed", "for example below: { soil: sand }");
   }
   if (!read.has(`${path}.firm_level`)) return;

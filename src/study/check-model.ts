@@ -58,13 +58,17 @@ function checkTargetPeriod({ study, read, problem, notice }: CheckContext): void
     if (!read.has("assessment.period"))
       notice(
         where,
-        `is for ${target.period} years, but nothing in this study is yearly: the probability holds for the ground as it is, not per year`,
+        `is for ${years(target.period)}, but nothing in this study is yearly: the probability holds for the ground as it is, not per year`,
       );
   } else if (period !== target.period) {
     problem(
       where,
-      `the target is for ${target.period} years and the study for ${period}; they must be equal`,
+      `the target is for ${years(target.period)} and the study for ${years(period)}; they must be equal`,
       "give the target for the period of the study",
     );
   }
+}
+
+function years(count: number): string {
+  return count === 1 ? "1 year" : `${count} years`;
 }

@@ -55,13 +55,16 @@ function checkPath({ study, problem, changed }: CheckContext, named: string, whe
 
 /**
  * What tests on a path can teach: it must be uncertain, a yearly one must state its knowledge, and the error of a test must
- * be known. Error texts stand at `where`, the path of the text that names the variable.
+ * be known.
+ *
+ * @param where path of the text that names the variable
+ * @param errorAt path where the error of a test stands or would stand
  */
 export function checkLearnable(
   context: CheckContext,
   named: string,
   where: string,
-  hasError: boolean,
+  errorAt: string,
 ): UncertainQuantity | undefined {
   if (named === "" || !checkPath(context, named, where)) return undefined;
   const quantity = quantityAt(context.study, named)!;
@@ -77,12 +80,9 @@ export function checkLearnable(
       `give knowledge beside yearly: true at ${named}`,
     );
   }
-  if (!hasError && !quantity.scatter) {
-    context.problem(
-      where,
-      "error is missing: the standard deviation of one result about the true mean",
-      `for example error: 1.5 (only a variable with scatter does without)`,
-    );
+  if (!context.read.has(errorAt) && !quantity.scatter) {
+    const message = "is missing: the standard deviation of one result about the true mean, soil scatter included";
+    context.problem(errorAt, message, "for example error: 1.5; only a variable with scatter does without");
   }
   return quantity;
 }

@@ -15,26 +15,44 @@ export interface Findings {
   readonly notices: Notice[];
   /** Placed at the value, or at the nearest parent's key where the path is not in the file. */
   problem(path: string, message: string, hint?: string): void;
+  /** Placed where the caller says. */
+  placedProblem(at: Place, path: string, message: string, hint?: string): void;
   /** Placed at the key itself. */
   keyProblem(path: string, message: string, hint?: string): void;
   notice(path: string, message: string): void;
 }
 
+/** Beyond this many problems only their number is kept. */
+const mostProblems = 200;
+
 export function collectFindings(places: Places): Findings {
   const problems: Problem[] = [];
   const notices: Notice[] = [];
-  const add = (path: string, part: "key" | "value", message: string, hint?: string): void => {
-    const at = placeOf(path, part, places);
-    if (problems.some((one) => one.path === path && one.message === message)) return;
-    problems.push({ path, ...(at && { at }), message, ...(hint !== undefined && { hint }) });
+  const seen = new Set<string>();
+  let count = 0;
+  const isNew = (list: string, path: string, message: string): boolean => {
+    const size = seen.size;
+    return seen.add(`${list}\n${path}\n${message}`).size > size;
+  };
+  const add = (place: () => Place | null, path: string, message: string, hint?: string): void => {
+    if (!isNew("problems", path, message)) return;
+    if (count < mostProblems) {
+      const at = place();
+      problems.push({ path, ...(at && { at }), message, ...(hint !== undefined && { hint }) });
+    }
+    count++;
+    if (count > mostProblems) {
+      problems[mostProblems] = { path: "", message: `has ${count - mostProblems} more problems than are listed here` };
+    }
   };
   return {
     problems,
     notices,
-    problem: (path, message, hint) => add(path, "value", message, hint),
-    keyProblem: (path, message, hint) => add(path, "key", message, hint),
+    problem: (path, message, hint) => add(() => placeOf(path, "value", places), path, message, hint),
+    keyProblem: (path, message, hint) => add(() => placeOf(path, "key", places), path, message, hint),
+    placedProblem: (at, path, message, hint) => add(() => at, path, message, hint),
     notice: (path, message) => {
-      if (!notices.some((one) => one.path === path && one.message === message)) notices.push({ path, message });
+      if (isNew("notices", path, message)) notices.push({ path, message });
     },
   };
 }
@@ -45,8 +63,9 @@ function placeOf(path: string, part: "key" | "value", places: Places): Place | n
   const keys = path.split(".");
   while (keys.length > 1) {
     keys.pop();
-    const parent = places(keys.join("."), "key");
-    if (parent !== undefined) return parent;
+    const parent = keys.join(".");
+    const at = places(parent, "key") ?? places(parent, "value"); // an entry of a list has no key of its own
+    if (at !== undefined || places(parent, "key") === null) return at ?? null;
   }
   return places("", "value") ?? null;
 }

@@ -60,7 +60,7 @@ export function brief(value: number): string {
 function rangeHint(value: number, raw: unknown, field: Field, units: Units): string | undefined {
   const fits = (candidate: number): boolean => candidate >= field.lowest && candidate <= field.highest;
   const plain = value * displayUnit(field.dimension, units).factor;
-  if (field.dimension === "ratio" && value > 0 && fits(value / 100))
+  if (field.dimension === "ratio" && value >= 10 && fits(value / 100))
     return `did you mean ${brief(plain / 100)}? (${brief(plain)} % is ${brief(plain / 100)})`;
   if (field.dimension === "unit_weight" && typeof raw === "number" && units === "metric") {
     const found = unitWeightHint(raw, fits);

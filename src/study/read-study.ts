@@ -75,11 +75,7 @@ function readSound(tree: unknown, places: Places, options: ReadOptions, changed 
           places,
         ),
   );
-  const document = setAll(
-    tree,
-    set.map(([path, value]) => [path, parsedText(path, value, findings)]),
-    findings,
-  );
+  const document = setAll(tree, parsedValues(set, findings), findings);
   const clean = withoutEmpty(document, studySchema);
   checkStructure(studySchema, clean, "", findings);
   const list = options.notAvailable ?? notAvailable;
@@ -107,13 +103,18 @@ function setAll(tree: unknown, values: readonly (readonly [string, unknown])[], 
   return here;
 }
 
-/** A text as YAML: `2.5`, `2.5 m`, `{ uniform: { from: 0, to: 1 } }`. */
-function parsedText(path: string, value: unknown, findings: Findings): unknown {
-  if (typeof value !== "string") return plainTree(value, findings);
-  const inside = collectFindings(nowhere);
-  const parsed = readTree(value, textPlaces(value), inside);
-  for (const problem of inside.problems) findings.problem(path, `"${value}" ${problem.message}`, problem.hint);
-  return parsed;
+/** Texts as YAML: `2.5`, `2.5 m`, `{ uniform: { from: 0, to: 1 } }`. What cannot be read is left out, with a problem. */
+function parsedValues(
+  set: readonly (readonly [string, unknown])[],
+  findings: Findings,
+): (readonly [string, unknown])[] {
+  return set.flatMap(([path, value]) => {
+    const inside = collectFindings(nowhere);
+    const parsed = typeof value === "string" ? readTree(value, textPlaces(value), inside) : plainTree(value, inside);
+    const found = typeof value === "string" ? `"${value}" ` : "";
+    for (const problem of inside.problems) findings.problem(path, `${found}${problem.message}`, problem.hint);
+    return inside.problems.length > 0 ? [] : [[path, parsed] as const];
+  });
 }
 
 /** What was set from outside, and the parents made for it, stand nowhere in the file. */

@@ -57,23 +57,21 @@ export function resolveDistribution(
 
 /** The named numbers must not fall, and the first must be below the last. */
 function ordered(given: Numbers, names: readonly string[], { path, findings, show }: Place): boolean {
+  const [first, last] = [names[0]!, names.at(-1)!];
   for (let i = 1; i < names.length; i++) {
     const [lower, upper] = [names[i - 1]!, names[i]!];
-    const apart = names.length === 2 ? given[lower]! < given[upper]! : given[lower]! <= given[upper]!;
-    if (!apart) {
-      findings.problem(
-        `${path}.${upper}`,
-        `${upper} ${show(given[upper]!)} must be above ${lower} ${show(given[lower]!)}`,
-        "are the two the wrong way round?",
-      );
-      return false;
-    }
+    if (given[lower]! <= given[upper]!) continue;
+    findings.problem(
+      `${path}.${upper}`,
+      `${upper} ${show(given[upper]!)} is below ${lower} ${show(given[lower]!)}`,
+      "are the two the wrong way round?",
+    );
+    return false;
   }
-  const [first, last] = [names[0]!, names.at(-1)!];
   if (given[first]! < given[last]!) return true;
   findings.problem(
     `${path}.${last}`,
-    `${last} must be above ${first}: both are ${show(given[first]!)}`,
+    `${last} must be above ${first}; both are ${show(given[first]!)}`,
     "a certain number is written alone",
   );
   return false;
@@ -148,5 +146,10 @@ function range(given: Numbers, as: "normal" | "lognormal", place: Place): Distri
 
 /** `12.3 lb/ft3`, `34 degrees`. */
 export function showWith(unit: string, factor: number): (value: number) => string {
-  return (value) => `${brief(value * factor)}${unit === "" ? "" : ` ${unit}`}`;
+  return (value) => withUnit(brief(value * factor), unit);
+}
+
+/** `1 degree`, `2 degrees`, `0.8`. */
+export function withUnit(text: string, unit: string): string {
+  return unit === "" ? text : `${text} ${text === "1" && unit === "degrees" ? "degree" : unit}`;
 }

@@ -373,7 +373,7 @@ const decision = group("What can be done, what it costs, and what could be inves
       }),
     )
     .min(1)
-    .meta(about("Options", [{ name: "Build as drawn", cost: 0 }])),
+    .meta(about("What can be done; the first is the base case", [{ name: "Build as drawn", cost: 0 }])),
   investigations: z
     .array(
       group("One investigation: informs a path with tests, or a list of them", {

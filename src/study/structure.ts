@@ -71,18 +71,27 @@ function report(issue: z.core.$ZodIssue, schema: z.ZodType, value: unknown, pref
   } else if (found === null) {
     findings.problem(path, "is empty", "give a value, or leave the key out");
   } else if (issue.code === "invalid_value") {
-    const words = issue.values.map(String);
-    findings.problem(
-      path,
-      `found ${shown(found)}; allowed: ${words.join(", ")}`,
-      typeof found === "string" ? didYouMean(found, words) : undefined,
-    );
+    notAllowed(path, found, issue.values.map(String), findings);
   } else if (issue.code === "invalid_key") {
     findings.keyProblem(path, issue.issues[0]?.message ?? "is not a name that can be used here");
   } else {
     const wanted = metaOf(here).wanted ?? wantedType(issue, here);
     findings.problem(path, `found ${shown(found)}; ${wanted} is needed`, typeHint(found, here));
   }
+}
+
+/** Longest list of allowed words that is written out. */
+const mostWords = 12;
+
+function notAllowed(path: string, found: unknown, words: readonly string[], findings: Findings): void {
+  const long = words.length > mostWords;
+  const allowed = long ? `${words.length} names are allowed` : `allowed: ${words.join(", ")}`;
+  const otherwise = long ? `for example ${words.slice(0, 3).join(", ")}; toehold schema lists them all` : undefined;
+  findings.problem(
+    path,
+    `found ${shown(found)}; ${allowed}`,
+    typeof found === "string" ? didYouMean(found, words, otherwise) : otherwise,
+  );
 }
 
 function unknownKey(path: string, key: string, here: z.ZodType | undefined, findings: Findings): void {
@@ -126,7 +135,8 @@ function typeHint(found: unknown, schema: z.ZodType | undefined): string | undef
   if (here instanceof z.ZodNumber && typeof found === "string" && /^[\d_, ]+$/.test(found))
     return `write ${found.replace(/[_, ]/g, "")}`;
   if (here instanceof z.ZodString && typeof found === "number") return `put it in quotes: "${found}"`;
-  if (here instanceof z.ZodArray) return "put the entries in [ ] or on lines of their own that begin with -";
+  if (here instanceof z.ZodArray && !Array.isArray(found))
+    return "put the entries in [ ] or on lines of their own that begin with -";
   return undefined;
 }
 
@@ -136,7 +146,7 @@ export function joined(prefix: string, path: string): string {
 
 /** A found value, short enough for a message. */
 export function shown(value: unknown): string {
-  if (Array.isArray(value)) return "a list";
+  if (Array.isArray(value)) return `a list of ${value.length}`;
   if (isRecord(value)) return "a group of keys";
   if (typeof value !== "string") return String(value);
   return value.length > 40 ? `"${value.slice(0, 37)}…"` : `"${value}"`;

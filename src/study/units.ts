@@ -167,7 +167,7 @@ export function readMeasure(text: string, dimension: Dimension, units: Units): M
   const slope = dimension === "slope" ? riseOverRun.exec(trimmed) : null;
   if (slope) return slopeAngle(Number(slope[1]), Number(slope[2]));
   const parts = numberAndUnit.exec(trimmed);
-  if (!parts) return { message: `found ${quoted(text)}, which is not a number${wantedUnits(dimension)}` };
+  if (!parts) return { message: `found ${quoted(text)}, which is not a number${withUnit(dimension)}` };
   const value = Number(parts[1]);
   const unit = canonicalUnit(parts[2]!);
   if (!Number.isFinite(value)) return { message: `found ${quoted(text)}, which is too large` };
@@ -194,12 +194,17 @@ function canonicalUnit(text: string): string {
     .replace("sqft", "ft2");
 }
 
+function withUnit(dimension: Dimension): string {
+  return usualUnits(dimension).length === 0 ? "" : `, with or without a unit${wantedUnits(dimension)}`;
+}
+
 function wantedUnits(dimension: Dimension): string {
   const units = usualUnits(dimension);
   return units.length === 0 ? "" : ` (${units.join(", ")})`;
 }
 
 function unitHint(value: number, unit: string, dimension: Dimension): string | undefined {
+  if (/^,\d/.test(unit)) return `write a decimal point: ${value}.${unit.slice(1)}`;
   if (dimension === "unit_weight" && /^(kg|t|Mg|g)\/c?m3$/.test(unit)) {
     const perCubicMetre = { "kg/m3": 1, "t/m3": 1e3, "Mg/m3": 1e3, "g/cm3": 1e3 }[unit];
     if (perCubicMetre === undefined) return "that is a density; a unit weight is a force per volume";

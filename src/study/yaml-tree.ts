@@ -29,6 +29,8 @@ export const mostValues = 100_000;
 
 export interface TextPlaces {
   readonly places: Places;
+  /** Line and column of the character at an offset. */
+  placeOfOffset(offset: number): Place;
   remember(path: string, part: "key" | "value", offset: number): void;
 }
 
@@ -48,6 +50,7 @@ export function textPlaces(text: string): TextPlaces {
     return { line: low + 1, column: offset - starts[low]! + 1 };
   };
   return {
+    placeOfOffset,
     places: (path, part) => {
       const offset = offsets.get(`${part} ${path}`);
       return offset === undefined ? undefined : placeOfOffset(offset);
@@ -126,10 +129,7 @@ function placed(
   at: TextPlaces,
   findings: Findings,
 ): void {
-  const key = `offset ${offset}`;
-  at.remember(key, "value", offset);
-  const place = at.places(key, "value")!;
-  findings.problems.push({ path, at: place, message, ...(hint !== undefined && { hint }) });
+  findings.placedProblem(at.placeOfOffset(offset), path, message, hint);
 }
 
 function convert(document: Document, at: TextPlaces, findings: Findings): unknown {
