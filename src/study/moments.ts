@@ -57,7 +57,7 @@ function triangularMoments(a: number, c: number, b: number): Moments {
  *
  *   mean = m + s (φ(a) − φ(b))/Z,  variance = s² [1 + (a φ(a) − b φ(b))/Z − ((φ(a) − φ(b))/Z)²]
  *
- * Mirrored where both cuts lie above the mean, so that Z keeps its digits.
+ * Both cuts are finite. Mirrored where both lie above the mean, so that Z keeps its digits.
  */
 function truncatedNormalMoments(m: number, s: number, from: number, to: number): Moments {
   if (from > m) {
@@ -68,7 +68,7 @@ function truncatedNormalMoments(m: number, s: number, from: number, to: number):
   const b = (to - m) / s;
   const z = normalCdf(b) - normalCdf(a);
   const shift = (normalPdf(a) - normalPdf(b)) / z;
-  const atEnds = ((Number.isFinite(a) ? a * normalPdf(a) : 0) - (Number.isFinite(b) ? b * normalPdf(b) : 0)) / z;
+  const atEnds = (a * normalPdf(a) - b * normalPdf(b)) / z;
   return { mean: m + s * shift, sd: s * Math.sqrt(Math.max(0, 1 + atEnds - shift * shift)) };
 }
 

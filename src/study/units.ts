@@ -204,7 +204,8 @@ function wantedUnits(dimension: Dimension): string {
 }
 
 function unitHint(value: number, unit: string, dimension: Dimension): string | undefined {
-  if (/^,\d/.test(unit)) return `write a decimal point: ${value}.${unit.slice(1)}`;
+  const digits = /^,(\d+)/.exec(unit)?.[1];
+  if (digits !== undefined) return commaHint(value, digits);
   if (dimension === "unit_weight" && /^(kg|t|Mg|g)\/c?m3$/.test(unit)) {
     const perCubicMetre = { "kg/m3": 1, "t/m3": 1e3, "Mg/m3": 1e3, "g/cm3": 1e3 }[unit];
     if (perCubicMetre === undefined) return "that is a density; a unit weight is a force per volume";
@@ -219,4 +220,9 @@ function unitHint(value: number, unit: string, dimension: Dimension): string | u
 function quoted(text: string): string {
   const short = text.length > 40 ? `${text.slice(0, 37)}…` : text;
   return `"${short}"`;
+}
+
+function commaHint(value: number, digits: string): string {
+  const fraction = `write ${value}.${digits} with a decimal point`;
+  return digits.length === 3 ? `${fraction}, or ${value}${digits} without a comma` : fraction;
 }
