@@ -1,0 +1,187 @@
+/** How likely is each failure, how sure are we, and which unknown drives it? */
+import { cautions } from "./cautions.ts";
+import { cautiousValues, driverTable } from "./drivers/driver-table.ts";
+import { failurePicture } from "./drivers/failure-picture.ts";
+import { tornado } from "./drivers/tornado.ts";
+import { mechanicsNotes } from "./mechanics/notes.ts";
+import { createWorkspace } from "./mechanics/workspace.ts";
+import { buildModel, type Model, unknownsOf } from "./model.ts";
+import { assessmentNotes } from "./notes.ts";
+import { createBlockCounter, type SamplingPlan } from "./reliability/block-tally.ts";
+import { localRunner } from "./reliability/local-runner.ts";
+import {
+  type BlockRunner,
+  histogramEdges,
+  histogramOf,
+  type MonteCarloRun,
+  monteCarlo,
+  monteCarloResult,
+} from "./reliability/monte-carlo.ts";
+import { firstOrderSecondMoment } from "./reliability/second-moment.ts";
+import { systemBounds } from "./reliability/system-bounds.ts";
+import type {
+  AssessResult,
+  BestEstimate,
+  LimitStateAssessment,
+  SecondMomentResult,
+  SystemAssessment,
+  TornadoBar,
+  VariableSummary,
+} from "./results.ts";
+import type { LimitStateName, Study } from "./study/study.ts";
+import { variableSummaries } from "./variables.ts";
+import { version } from "./version.ts";
+
+export interface AssessOptions {
+  /** In place of the study's own. */
+  readonly seed?: string;
+  readonly samples?: number;
+  readonly precision?: number;
+  readonly onProgress?: (done: number, of: number) => void;
+  readonly signal?: AbortSignal;
+  /** Counts blocks elsewhere, on workers; in this thread where absent. */
+  readonly startRunner?: (study: Study, plan: SamplingPlan) => BlockRunner;
+  readonly workers?: number;
+  /** A clock in seconds, for the time shown beside the result; no time is shown without one. */
+  readonly clock?: () => number;
+}
+
+/**
+ * @throws StudyError where correlations have no joint distribution
+ */
+export async function assess(study: Study, options: AssessOptions = {}): Promise<AssessResult> {
+  const model = buildModel(study);
+  const { states, space, kernel } = model;
+  const seed = options.seed ?? study.assessment.seed;
+  const secondMoment = firstOrderSecondMoment(states, space, correlationOf(study, model));
+  const bars = tornado(states, space);
+  const plan: SamplingPlan = {
+    seed,
+    purpose: "plain sampling",
+    samples: options.samples ?? study.assessment.samples,
+    centres: secondMoment.map((moment) => moment.mean),
+    edges: secondMoment.map((moment) => histogramEdges(moment.mean, moment.sd)),
+  };
+  const start = options.clock?.() ?? 0;
+  const runner = options.startRunner?.(study, plan) ?? localRunner(createBlockCounter(states, space, plan));
+  const run = await monteCarlo(plan, runner, {
+    precision: options.precision ?? study.assessment.precision,
+    ...(options.onProgress === undefined ? {} : { onProgress: options.onProgress }),
+    ...(options.signal === undefined ? {} : { signal: options.signal }),
+  });
+  const seconds = (options.clock?.() ?? 0) - start;
+  const limitStates = Object.fromEntries(
+    states.names.map((name, k) => [name, limitStateAssessment(model, run, plan, k, secondMoment[k], bars[k])]),
+  ) as Partial<Record<LimitStateName, LimitStateAssessment>>;
+  const system = systemAssessment(model, run, limitStates);
+  const variables = variableSummaries(study, unknownsOf(study, kernel), space);
+  const columns = columnsAtMeans(model);
+  const { target } = study.assessment;
+  const result: AssessResult = {
+    study: study.title,
+    kind: "assess",
+    seed,
+    variables,
+    limitStates,
+    system,
+    bestEstimate: plainEstimate(study, system),
+    ...(target === undefined ? {} : { target }),
+    run: {
+      version,
+      seed,
+      workers: options.workers ?? 1,
+      complete: run.complete,
+      sampling: { evaluations: run.samples, seconds },
+    },
+    warnings: [],
+    cautions,
+  };
+  return {
+    ...result,
+    warnings: [...study.notices, ...mechanicsNotes(study, kernel, columns), ...assessmentNotes(study, result)],
+  };
+}
+
+/** The Pearson coefficient that the study gives for two unknowns, by place. */
+function correlationOf(study: Study, model: Model): (i: number, j: number) => number {
+  const { unknowns } = model.space;
+  const given = new Map(
+    study.correlations.flatMap(({ between: [a, b], coefficient }) => [
+      [`${a} ${b}`, coefficient] as const,
+      [`${b} ${a}`, coefficient] as const,
+    ]),
+  );
+  return (i, j) => given.get(`${unknowns[i].path} ${unknowns[j].path}`) ?? 0;
+}
+
+function limitStateAssessment(
+  model: Model,
+  run: MonteCarloRun,
+  plan: SamplingPlan,
+  k: number,
+  secondMoment: SecondMomentResult,
+  bars: readonly TornadoBar[],
+): LimitStateAssessment {
+  const state = run.states[k];
+  const picture = failurePicture(model.space, state);
+  return {
+    factorAtMean: secondMoment.mean,
+    monteCarlo: monteCarloResult(run, state, plan.centres[k]),
+    firstOrderSecondMoment: secondMoment,
+    drivers: driverTable(model.space, { shares: secondMoment.contributions, tornado: bars, picture }),
+    tornado: bars,
+    failurePicture: picture,
+    histogram: histogramOf(state, plan.edges[k]),
+    convergence: state.convergence,
+  };
+}
+
+function systemAssessment(
+  model: Model,
+  run: MonteCarloRun,
+  limitStates: Partial<Record<LimitStateName, LimitStateAssessment>>,
+): SystemAssessment {
+  const picture = failurePicture(model.space, run.system);
+  const each = Object.values(limitStates).map((state) => state.monteCarlo.probability);
+  return {
+    monteCarlo: monteCarloResult(run, run.system),
+    bounds: systemBounds(each),
+    drivers: driverTable(model.space, { picture }),
+    failurePicture: picture,
+    convergence: run.system.convergence,
+  };
+}
+
+function plainEstimate(study: Study, system: SystemAssessment): BestEstimate {
+  const { probability, standardError, interval, reliabilityIndex, samples } = system.monteCarlo;
+  const { target } = study.assessment;
+  // Met only where the whole interval lies below the target: an unresolved tail is not a proof.
+  const meets = target === undefined ? {} : { meetsTarget: interval[1] <= target.probability };
+  return { method: "plain", probability, standardError, interval, reliabilityIndex, evaluations: samples, ...meets };
+}
+
+function columnsAtMeans(model: Model): readonly Float64Array[] {
+  const workspace = createWorkspace(model.kernel, 1);
+  const means = new Map(model.space.unknowns.map((unknown) => [unknown.path, unknown.marginal.mean]));
+  for (const input of model.kernel.inputs) {
+    if (input.fixed === undefined)
+      workspace.columns[input.slot][0] =
+        input.scale * Math.min(Math.max(means.get(input.path) ?? 0, input.lowest), input.highest);
+  }
+  workspace.run(1);
+  return workspace.columns;
+}
+
+/** Each variable at its adverse 5 % fractile, for `check --at cautious`: adverse to the limit state with the lowest factor at the means. */
+export function cautiousPoint(study: Study): {
+  readonly name: string;
+  readonly values: Readonly<Record<string, number>>;
+} {
+  const { states, space } = buildModel(study);
+  const moments = firstOrderSecondMoment(states, space, () => 0);
+  const bars = tornado(states, space);
+  const lowest = moments.reduce((best, moment, k) => (moment.mean < moments[best].mean ? k : best), 0);
+  return { name: "cautious", values: cautiousValues(space, bars[lowest]) };
+}
+
+export type { VariableSummary };

@@ -1,0 +1,95 @@
+/** What an engineer should know about a probability before she signs it. Sentences, never refusals. */
+import type { AssessResult } from "./results.ts";
+import type { Notice, Study } from "./study/study.ts";
+
+export function assessmentNotes(study: Study, result: AssessResult): readonly Notice[] {
+  return [
+    ...modelUncertainty(study),
+    ...unstableSamples(result),
+    ...strays(result),
+    ...noFailures(result),
+    ...unfinished(result),
+    ...groundAsItIs(study),
+    ...overturningLast(result),
+  ];
+}
+
+/** Published figures that may serve where nothing better is known; JCSS Probabilistic Model Code, 3.7 (2006). */
+function modelUncertainty(study: Study): readonly Notice[] {
+  const { factors } = study.model;
+  const certain = (value: unknown): boolean => typeof value === "number";
+  if (!certain(factors.earthThrust) || !certain(factors.baseResistance) || !certain(factors.bearingCapacity)) return [];
+  return [
+    {
+      path: "model.factors",
+      message:
+        "no model uncertainty is given: the probability takes the formulas as exact. JCSS Probabilistic Model Code, part 3.7 (2006), suggests factors with mean 1.0 and standard deviation 0.10 for the stability of retaining walls, 0.15 for shallow foundations on homogeneous ground and 0.20 otherwise",
+    },
+  ];
+}
+
+function unstableSamples(result: AssessResult): readonly Notice[] {
+  const { counts, samples, probabilityAmongStable } = result.system.monteCarlo;
+  if (counts.slopeUnstable === 0 || probabilityAmongStable === undefined) return [];
+  return [
+    {
+      path: "ground.behind.slope",
+      message: `in ${counts.slopeUnstable} of ${samples} samples the slope is steeper than the soil behind the wall can bear; among the others the probability of failure is ${probabilityAmongStable.toPrecision(3)}`,
+    },
+  ];
+}
+
+/** A sample beyond a physical limit is taken at the limit: shown where that is frequent or matters beside the failures. */
+function strays(result: AssessResult): readonly Notice[] {
+  const { counts, samples, failures } = result.system.monteCarlo;
+  if (counts.outOfRange === 0) return [];
+  if (counts.outOfRange <= samples / 1000 && counts.outOfRange <= failures / 100) return [];
+  return [
+    {
+      path: "",
+      message: `${counts.outOfRange} of ${samples} samples had a value outside its physical range and were taken at the limit (${failures} samples failed); choose a distribution that ends there`,
+    },
+  ];
+}
+
+function noFailures(result: AssessResult): readonly Notice[] {
+  const { failures, samples, interval } = result.system.monteCarlo;
+  if (failures > 0) return [];
+  return [
+    {
+      path: "assessment.samples",
+      message: `no failure in ${samples} samples: this says only that the probability is below ${interval[1].toPrecision(2)} with 97.5 % confidence, not that the wall cannot fail`,
+    },
+  ];
+}
+
+function unfinished(result: AssessResult): readonly Notice[] {
+  return result.run.complete
+    ? []
+    : [
+        {
+          path: "",
+          message: `stopped before the end: what is shown rests on the first ${result.run.sampling.evaluations} samples`,
+        },
+      ];
+}
+
+function groundAsItIs(study: Study): readonly Notice[] {
+  if (study.assessment.period !== undefined) return [];
+  return [
+    {
+      path: "assessment",
+      message: "no value in the study is yearly: the probability holds for the ground as it is, and is not per year",
+    },
+  ];
+}
+
+function overturningLast(result: AssessResult): readonly Notice[] {
+  if (result.limitStates.overturning === undefined) return [];
+  return [
+    {
+      path: "assessment.limit_states",
+      message: "overturning about the toe by itself normally comes after bearing failure: read the two together",
+    },
+  ];
+}
