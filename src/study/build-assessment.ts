@@ -13,7 +13,7 @@ export function buildAssessment(read: TreeReader): Assessment {
   return {
     limitStates: buildLimitStates(read),
     ...(eccentricityLimit !== undefined && { eccentricityLimit }),
-    seed: read.text("assessment.seed", defaults.seed),
+    seed: String(read.number("assessment.seed") ?? read.text("assessment.seed", defaults.seed)),
     samples: read.number("assessment.samples") ?? defaults.samples,
     precision: read.number("assessment.precision") ?? defaults.precision,
     ...(period !== undefined && { period }),

@@ -196,6 +196,15 @@ export const mixturePartSchema: z.ZodObject = z.strictObject({
 
 /** Schema of an uncertain value of one kind as a whole object, for checking keys and for the JSON Schema. */
 export function uncertainSchema(kind: string, nested = false): z.ZodObject {
+  const name = `${kind} ${nested}`;
+  const known = uncertainSchemas.get(name) ?? makeUncertainSchema(kind, nested);
+  uncertainSchemas.set(name, known);
+  return known;
+}
+
+const uncertainSchemas = new Map<string, z.ZodObject>();
+
+function makeUncertainSchema(kind: string, nested: boolean): z.ZodObject {
   const beside = nested ? {} : besideKeys;
   if (kind === "mixture")
     return z.strictObject({

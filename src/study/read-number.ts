@@ -67,6 +67,7 @@ function rangeHint(value: number, raw: unknown, field: Field, units: Units): str
     if (found !== undefined) return found;
   }
   if (value < 0 && fits(-value)) return `did you mean ${brief(-plain)}?`;
+  if (value < 2 * field.highest) return undefined; // just outside is no slip of the decimal point
   for (const power of [10, 100, 1000]) {
     if (fits(value / power)) return `did you mean ${withPoint(plain / power)}?`;
   }
@@ -81,7 +82,7 @@ function unitWeightHint(raw: number, fits: (candidate: number) => boolean): stri
 }
 
 function withPoint(value: number): string {
-  const text = brief(value);
+  const text = String(Number(value.toPrecision(6)));
   return /^-?\d+$/.test(text) ? `${text}.0` : text;
 }
 

@@ -264,7 +264,10 @@ const assessment = group("What is assessed, and how finely", {
       ...about("Largest eccentricity as a share of the base width, for the limit state eccentricity", 0.333),
       wanted: "a share of the base width above 0 and at most 0.5",
     }),
-  seed: text("Any text; the same seed gives the same numbers", "bay-3", defaults.seed),
+  seed: z
+    .union([z.string(), z.number()])
+    .optional()
+    .meta({ ...about("Any text; the same seed gives the same numbers", "bay-3", defaults.seed), wanted: "a text" }),
   samples: z
     .number()
     .int()

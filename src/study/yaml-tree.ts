@@ -111,6 +111,10 @@ const syntaxHints: Readonly<Record<string, string>> = {
   BAD_INDENT: "check the brackets and the indentation just above",
 };
 
+/** Tags of what a study is made of; a text may carry one without harm. */
+const plainTags = /^tag:yaml\.org,2002:(str|int|float|bool|null|map|seq)$/;
+const tagHint = "take out the word after the !";
+
 function syntaxProblem(error: YAMLError, at: TextPlaces, findings: Findings): void {
   const message =
     error.code === "MULTIPLE_DOCS" ? "the file holds more than one document" : `is not valid YAML: ${error.message}`;
@@ -118,7 +122,7 @@ function syntaxProblem(error: YAMLError, at: TextPlaces, findings: Findings): vo
 }
 
 function tagProblem(warning: YAMLError, at: TextPlaces, findings: Findings): void {
-  placed("", warning.pos[0], `${warning.message}; a study uses no tags`, "take out the word after the !", at, findings);
+  placed("", warning.pos[0], `${warning.message}; a study uses no tags`, tagHint, at, findings);
 }
 
 function placed(
@@ -143,6 +147,11 @@ function convert(document: Document, at: TextPlaces, findings: Findings): unknow
     }
     if (depth > deepestNesting) {
       findings.problem(path, `is nested too deeply; at most ${deepestNesting} levels are read`);
+      return null;
+    }
+    const tag = isMap(node) || isSeq(node) || isScalar(node) ? node.tag : undefined;
+    if (tag !== undefined && !plainTags.test(tag)) {
+      placed(path, (node as Node).range?.[0] ?? 0, `found the tag ${tag}; a study uses no tags`, tagHint, at, findings);
       return null;
     }
     if (isAlias(node)) return follow(node.resolve(document), `*${node.source}`, node, path, depth);
