@@ -7,11 +7,10 @@ export const leastCosine: number = Math.cos(largestSeismicAngle);
 /**
  * Angle by which inertia turns the resultant body force of the soil from the vertical.
  *
- *   ψ = atan( kh / (1 − kv) · m ),   m = 1 above the water level, γsat / (γsat − γw) below it
+ *   ψ = atan( kh / (1 − kv) · m ),   m = 1 above the water level, `submergedMassRatio` below it
  *
  * Below water the pore water moves with the soil: inertia acts on γsat, gravity on the buoyant weight (EN 1998-5,
- * Annex E). Without any buoyant weight (m infinite, negative or not a number, or kv ≥ 1) ψ is taken as 89°, and so is
- * any larger angle; kh ≤ 0 gives 0.
+ * Annex E). ψ is not taken above 89°, and at 89° where m is negative or not a number or kv ≥ 1; kh ≤ 0 gives 0.
  *
  * @param kh horizontal pseudo-static coefficient, dimensionless, 0 or more
  * @param kv vertical coefficient, positive upwards (it lightens the soil), dimensionless
@@ -28,16 +27,18 @@ export function seismicAngle(kh: number, kv: number, massRatio: number): number 
 /**
  * Ratio of the mass that inertia moves to the weight that gravity leaves, below the water level.
  *
- *   m = γsat / (γsat − γw), infinite where γsat ≤ γw (`seismicAngle` then stops at 89°)
+ *   m = γsat / (γsat − γw), not above 1e6, which stands for all soils without buoyant weight (γsat ≤ γw)
+ *
+ * It is finite so that ψ still goes to 0 with kh.
  *
  * @param saturatedUnitWeight γsat, kN/m³
  * @param waterUnitWeight γw, kN/m³
- * @returns m, dimensionless, above 1
+ * @returns m, dimensionless, in (1, 1e6]
  * @source EN 1998-5:2004, Annex E, E.6 (impervious soil below the water table)
  */
 export function submergedMassRatio(saturatedUnitWeight: number, waterUnitWeight: number): number {
   const buoyant = saturatedUnitWeight - waterUnitWeight;
-  return buoyant > 0 ? saturatedUnitWeight / buoyant : Number.POSITIVE_INFINITY;
+  return buoyant > 0 ? Math.min(saturatedUnitWeight / buoyant, 1e6) : 1e6;
 }
 
 /**
