@@ -7,6 +7,16 @@
 import { type Coefficient, type Columns, type Kernel, type KernelInput, mark } from "./mechanics/kernel.ts";
 import { createWorkspace, factorSlots, type Workspace } from "./mechanics/workspace.ts";
 import type { JointSpace, Marginal } from "./probability/marginal.ts";
+import {
+  brokenCells,
+  createLocation,
+  fitTable,
+  type Location,
+  locate,
+  lookUp,
+  tableNodes,
+  tableReach,
+} from "./probability/marginal-table.ts";
 import type { LimitStates } from "./reliability/limit-states.ts";
 
 /** An input of the kernel driven by an unknown of the space. */
@@ -22,6 +32,23 @@ interface Drive {
   readonly coefficients: readonly Coefficient[];
   /** Whether a sample can lie outside the physical range. */
   readonly strays: boolean;
+  /** x as the column has it (held to its range, scaled), of u. */
+  exactly(u: number): number;
+  tables?: DriveTables;
+}
+
+/** Tables over u of the column itself and of the coefficients that hang on it alone. Made on first use. */
+interface DriveTables {
+  readonly broken: Uint8Array;
+  /** Absent for a normal marginal: a line needs no table. */
+  readonly column?: Float64Array;
+  readonly coefficients: readonly {
+    readonly values: Float64Array;
+    readonly into: Float64Array;
+    exactly(u: number): number;
+  }[];
+  /** Coefficients with a kink within reach, or of a column that is the same for all: by their formula. */
+  readonly byFormula: readonly { readonly value: (x: number) => number; readonly into: Float64Array }[];
 }
 
 export interface WallStates extends LimitStates {
@@ -56,13 +83,17 @@ export function wallStates(
         coordinates,
         weights: coordinates.map((coordinate) => row[coordinate]),
         column: columns[input.slot],
-        coefficients: kernel.coefficients.filter((coefficient) => coefficient.from === input.slot),
+        coefficients: kernel.coefficients.filter(
+          (coefficient) => coefficient.from === input.slot && workspace.needs(coefficient.into),
+        ),
         strays: marginal.lowest < input.lowest || marginal.highest > input.highest,
+        exactly: (u) => input.scale * Math.min(Math.max(marginal.quantileOfNormal(u), input.lowest), input.highest),
       };
     });
   const factors = kernel.limitStates.map((state) => columns[state.factor]);
   const kernelMarks = columns[kernel.marks];
   const u = new Float64Array(capacity);
+  const location = createLocation(capacity);
   const strayed = new Uint8Array(capacity);
   const evaluations = { exact: 0, batched: 0 };
 
@@ -87,13 +118,22 @@ export function wallStates(
       check(n);
       strayed.fill(0, 0, n);
       for (let d = 0; d < drives.length; d++) {
-        combine(drives[d], z, u, n);
-        fillExactly(drives[d], u, n, strayed);
+        const drive = drives[d];
+        combine(drive, z, u, n);
+        if (exact) fillExactly(drive, u, n, strayed);
+        else {
+          drive.tables ??= makeTables(drive, columns);
+          fillFromTables(drive, drive.tables, u, n, strayed, location);
+        }
       }
-      workspace.run(n);
+      if (exact) {
+        workspace.run(n);
+        evaluations.exact += n;
+      } else {
+        workspace.runStages(n);
+        evaluations.batched += n;
+      }
       finish(n, out, marks);
-      if (exact) evaluations.exact += n;
-      else evaluations.batched += n;
     },
     evaluateAt(x, n, out, marks) {
       check(n);
@@ -135,4 +175,61 @@ function hold(drive: Drive, x: Float64Array, n: number, strayed: Uint8Array): vo
     if (value < lowest || value > highest) strayed[i] |= mark.outOfRange;
     column[i] = scale * Math.min(Math.max(value, lowest), highest);
   }
+}
+
+function makeTables(drive: Drive, columns: Columns): DriveTables {
+  const { marginal, input } = drive;
+  const u = tableNodes();
+  const x = u.map((value) => drive.exactly(value));
+  const ends = drive.strays ? [marginal.normalOfQuantile(input.lowest), marginal.normalOfQuantile(input.highest)] : [];
+  const broken = brokenCells([...marginal.kinks, ...marginal.jumps, ...ends]);
+  const reach = [drive.exactly(-tableReach), drive.exactly(tableReach)];
+  const smooth = (coefficient: Coefficient): boolean =>
+    !coefficient.kinks.some((kink) => kink >= reach[0] && kink <= reach[1]);
+  return {
+    broken,
+    ...(marginal.kind === "normal" ? {} : { column: fitTable(x) }),
+    coefficients: drive.coefficients
+      .filter(smooth)
+      .map(({ value, into }) => ({
+        values: fitTable(x.map(value)),
+        into: columns[into],
+        exactly: (v) => value(drive.exactly(v)),
+      })),
+    byFormula: drive.coefficients
+      .filter((coefficient) => !smooth(coefficient))
+      .map(({ value, into }) => ({ value, into: columns[into] })),
+  };
+}
+
+function fillFromTables(
+  drive: Drive,
+  tables: DriveTables,
+  u: Float64Array,
+  n: number,
+  strayed: Uint8Array,
+  location: Location,
+): void {
+  const { column, marginal, input } = drive;
+  const tabulated = tables.coefficients;
+  if (tables.column !== undefined || tabulated.length > 0) locate(u, n, tables.broken, location);
+  if (drive.strays) markStrays(drive, u, n, strayed);
+  if (tables.column === undefined) {
+    const { mean, sd } = marginal;
+    const { lowest, highest, scale } = input;
+    for (let i = 0; i < n; i++) column[i] = scale * Math.min(Math.max(mean + sd * u[i], lowest), highest);
+  } else lookUp(tables.column, location, u, n, drive.exactly, column);
+  for (let k = 0; k < tabulated.length; k++)
+    lookUp(tabulated[k].values, location, u, n, tabulated[k].exactly, tabulated[k].into);
+  for (let k = 0; k < tables.byFormula.length; k++) {
+    const { value, into } = tables.byFormula[k];
+    for (let i = 0; i < n; i++) into[i] = value(column[i]);
+  }
+}
+
+/** Marks the samples beyond the physical range, found in u: the column itself is held to the range already. */
+function markStrays(drive: Drive, u: Float64Array, n: number, strayed: Uint8Array): void {
+  const low = drive.marginal.normalOfQuantile(drive.input.lowest);
+  const high = drive.marginal.normalOfQuantile(drive.input.highest);
+  for (let i = 0; i < n; i++) if (u[i] < low || u[i] > high) strayed[i] |= mark.outOfRange;
 }

@@ -7,6 +7,8 @@ export interface Workspace {
   readonly capacity: number;
   /** Runs the coefficients' formulas and the stages on the first `count` entries of the input columns. */
   run(count: number): void;
+  /** Whether anything wanted rests on this slot. */
+  needs(slot: Slot): boolean;
   /** The same without the coefficients, for a caller that has filled them from tables. */
   runStages(count: number): void;
 }
@@ -34,6 +36,7 @@ export function createWorkspace(kernel: Kernel, capacity: number, wanted?: reado
     columns,
     capacity,
     runStages,
+    needs: (slot) => wanted === undefined || needed.has(slot),
     run(count) {
       for (let k = 0; k < coefficients.length; k++) {
         const { value } = coefficients[k];

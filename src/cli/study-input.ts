@@ -1,0 +1,133 @@
+import { type Command, InvalidArgumentError, Option } from "commander";
+import { readStudy } from "../study/read-study.ts";
+import type { Study } from "../study/study.ts";
+import { type Io, readInput, UsageError } from "./io.ts";
+
+/** Options that every command on a study takes. */
+export interface CommonOptions {
+  readonly json?: boolean;
+  readonly output?: string;
+  readonly quiet?: boolean;
+  readonly set?: readonly (readonly [string, string])[];
+}
+
+export interface SamplingOptions extends CommonOptions {
+  readonly seed?: string;
+  readonly samples?: number;
+  readonly precision?: number;
+  readonly workers?: number;
+  readonly method?: string;
+}
+
+export function addCommonOptions(command: Command): Command {
+  return command
+    .option("--json", "print the result as JSON, and nothing else, on standard output")
+    .option("-o, --output <file>", "write the result to a file instead")
+    .option("--quiet", "print no more than is asked for")
+    .option("--set <path=value>", "set a value of the study before it is read; may be repeated", collectSetting, []);
+}
+
+export function addSamplingOptions(command: Command): Command {
+  return addCommonOptions(command)
+    .option("--seed <text>", "seed in place of the study's; the same seed gives the same numbers")
+    .option("--samples <n>", "most evaluations of one sampling run", wholeNumber(1, 1e12))
+    .option(
+      "--precision <cov>",
+      "coefficient of variation at which sampling may stop; 0 uses all samples",
+      numberBetween(0, 1),
+    )
+    .option("--workers <n>", "threads to sample on; the numbers do not depend on it", wholeNumber(1, 256))
+    .addOption(
+      new Option("--method <name>", "sampling method; chosen by the program where left out").choices([
+        "plain",
+        "latin_hypercube",
+        "sobol",
+        "importance",
+        "subset",
+        "directional",
+      ]),
+    );
+}
+
+function collectSetting(
+  text: string,
+  before: readonly (readonly [string, string])[],
+): readonly (readonly [string, string])[] {
+  const equals = text.indexOf("=");
+  if (equals < 1) throw new InvalidArgumentError("write it as path=value, for example water.behind.level=1.2");
+  return [...before, [text.slice(0, equals).trim(), text.slice(equals + 1).trim()]];
+}
+
+export function wholeNumber(lowest: number, highest: number): (text: string) => number {
+  return (text) => {
+    const value = Number(text);
+    if (!Number.isInteger(value) || value < lowest || value > highest)
+      throw new InvalidArgumentError(`it must be a whole number from ${lowest} to ${highest}`);
+    return value;
+  };
+}
+
+export function numberBetween(lowest: number, highest: number): (text: string) => number {
+  return (text) => {
+    const value = Number(text);
+    if (text.trim() === "" || !(value >= lowest && value <= highest))
+      throw new InvalidArgumentError(`it must be a number from ${lowest} to ${highest}`);
+    return value;
+  };
+}
+
+/** A study and the text it came from, for messages. */
+export interface StudyInput {
+  readonly study: Study;
+  readonly text: string;
+}
+
+/** Keeps the text beside a failure, so that the message can show the line. */
+export class StudyTextError extends Error {
+  readonly text: string;
+  override readonly cause: unknown;
+  constructor(cause: unknown, text: string) {
+    super("the study is wrong");
+    this.cause = cause;
+    this.text = text;
+  }
+}
+
+export async function loadStudy(file: string, options: CommonOptions, io: Io): Promise<StudyInput> {
+  const text = await readInput(file, io);
+  return withText(text, () => ({
+    study: readStudy(text, { file: file === "-" ? "standard input" : file, set: options.set ?? [] }),
+    text,
+  }));
+}
+
+/** Runs something that may find the study wrong; the error then carries the text. */
+export function withText<T>(text: string, run: () => T): T {
+  try {
+    return run();
+  } catch (error) {
+    throw new StudyTextError(error, text);
+  }
+}
+
+/** Where a study gives the point of a calculation: a file of path: value. */
+export async function readValues(file: string, io: Io): Promise<Record<string, number>> {
+  const text = await readInput(file, io);
+  const { parse } = await import("yaml");
+  let tree: unknown;
+  try {
+    tree = parse(text);
+  } catch (error) {
+    throw new UsageError(`${file} is not YAML: ${(error as Error).message.split("\n")[0]}`);
+  }
+  if (typeof tree !== "object" || tree === null || Array.isArray(tree))
+    throw new UsageError(`${file} should hold lines of path: value`);
+  const entries = Object.entries(tree).map(([path, value]) => {
+    if (typeof value !== "number" || !Number.isFinite(value))
+      throw new UsageError(
+        `${file}: ${path} should be a number, in the units of the result file, not ${JSON.stringify(value)}`,
+      );
+    return [path, value] as const;
+  });
+  return Object.fromEntries(entries);
+}

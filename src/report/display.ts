@@ -1,0 +1,59 @@
+/** House values as the study's reader wants them: metric or US. */
+
+import type { Units } from "../study/study.ts";
+import { type Dimension, displayUnit } from "../study/units.ts";
+import { threeFigures } from "./number.ts";
+
+/** Dimensions by the unit that results carry. */
+const byUnit: Readonly<Record<string, Dimension>> = {
+  m: "length",
+  "kN/m": "line_force",
+  kPa: "pressure",
+  "kN/m³": "unit_weight",
+  "kNm/m": "moment",
+  "°": "angle",
+  "–": "ratio",
+};
+
+export interface Display {
+  readonly units: Units;
+  /** 3.28 ft for 1 m: the number alone. */
+  number(value: number, houseUnit: string): string;
+  unit(houseUnit: string): string;
+  /** Number and unit. */
+  quantity(value: number, houseUnit: string): string;
+  factor(houseUnit: string): number;
+}
+
+export function displayIn(units: Units): Display {
+  const of = (houseUnit: string): { unit: string; factor: number } => {
+    if (houseUnit === "m²")
+      return units === "us"
+        ? { unit: "ft²", factor: displayUnit("length", "us").factor ** 2 }
+        : { unit: "m²", factor: 1 };
+    const dimension = byUnit[houseUnit];
+    return dimension === undefined ? { unit: houseUnit, factor: 1 } : displayUnit(dimension, units);
+  };
+  return {
+    units,
+    number: (value, houseUnit) => threeFigures(value * of(houseUnit).factor),
+    unit: (houseUnit) => of(houseUnit).unit,
+    factor: (houseUnit) => of(houseUnit).factor,
+    quantity: (value, houseUnit) => {
+      const { unit, factor } = of(houseUnit);
+      const number = threeFigures(value * factor);
+      return unit === "–" ? number : unit === "°" ? `${number}°` : `${number} ${unit}`;
+    },
+  };
+}
+
+/** Words for a limit state, as they stand in a sentence. */
+export const limitStateWords: Readonly<Record<string, string>> = {
+  sliding: "sliding",
+  overturning: "overturning",
+  bearing: "bearing failure",
+  eccentricity: "too great an eccentricity",
+  deep_seated: "deep-seated failure",
+};
+
+export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
