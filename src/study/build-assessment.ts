@@ -1,8 +1,8 @@
 /** The `assessment` part of a study. */
 import { normalCdf, normalQuantile } from "../numeric/normal.ts";
 import type { TreeReader } from "./build-study.ts";
+import { defaults, limitStateNames } from "./defaults.ts";
 import { isRecord, valueAt } from "./paths.ts";
-import { defaults, limitStateNames } from "./schema.ts";
 import type { Assessment, LimitStateName, Target } from "./study.ts";
 import { namedTarget } from "./targets.ts";
 

@@ -1,10 +1,10 @@
 /** The `evidence` and `decision` parts of a study. */
 import type { TreeReader } from "./build-study.ts";
+import { defaults, limitStateNames } from "./defaults.ts";
 import { type Field, fieldOfPath } from "./fields.ts";
 import { isRecord, valueAt } from "./paths.ts";
 import { readKey, readNumber } from "./read-number.ts";
 import { readQuantity } from "./read-quantity.ts";
-import { defaults, limitStateNames } from "./schema.ts";
 import type { Decision, Evidence, Investigation, LimitStateName, Option, Quantity } from "./study.ts";
 
 export function buildEvidence(read: TreeReader): readonly Evidence[] {

@@ -1,11 +1,11 @@
 /** The checked tree of a study file -> the plain data of `study.ts`: values read, defaults filled in, keys in camelCase. */
 import { buildAssessment } from "./build-assessment.ts";
 import { buildDecision, buildEvidence } from "./build-decision.ts";
+import { defaults } from "./defaults.ts";
 import { fieldOfPath } from "./fields.ts";
 import type { Findings } from "./findings.ts";
 import { isRecord, valueAt } from "./paths.ts";
 import { readQuantity } from "./read-quantity.ts";
-import { defaults } from "./schema.ts";
 import type { Correlation, Ground, Layer, Loads, Model, Quantity, Soil, Study, Units, Wall, Water } from "./study.ts";
 
 /** Reads values out of a tree by path; where the schema has already complained it gives a default or NaN, so reading goes on. */

@@ -349,16 +349,14 @@ export function fieldOfPattern(pattern: string): Field {
 
 /** The field a path names (`soils.fill.friction_angle`), or undefined where the path is not one of a number. */
 export function fieldOfPath(path: string): Field | undefined {
-  const segments = path.split(".");
-  return fields.find((entry) => {
-    const pattern = entry.pattern.split(".");
-    return (
-      pattern.length === segments.length && pattern.every((part, i) => matches(part, segments[i]!, pattern[i - 1]!))
-    );
-  });
-}
-
-function matches(part: string, segment: string, parent: string): boolean {
-  if (part !== "*") return part === segment;
-  return parent === "soils" ? segment !== "" : /^(0|[1-9]\d*)$/.test(segment);
+  if (path.includes("*")) return undefined;
+  const exact = byPattern.get(path);
+  if (exact !== undefined) return exact;
+  const keys = path.split(".");
+  for (let i = 1; i < keys.length - 1; i++) {
+    const isName = keys[i - 1] === "soils" ? keys[i] !== "" : /^(0|[1-9]\d*)$/.test(keys[i]!);
+    const found = isName ? byPattern.get([...keys.slice(0, i), "*", ...keys.slice(i + 1)].join(".")) : undefined;
+    if (found !== undefined) return found;
+  }
+  return undefined;
 }

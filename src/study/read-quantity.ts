@@ -1,32 +1,20 @@
 /** A numeric field as it stands in the file -> a certain or uncertain quantity in house units. */
-import {
-  certainSchema,
-  distributionForms,
-  distributionKinds,
-  scatterKeys,
-  uncertainSchema,
-} from "./distribution-keys.ts";
+import { certainSchema, distributionForms, distributionKinds, uncertainSchema } from "./distribution-keys.ts";
 import type { Field } from "./fields.ts";
 import { distributionMean } from "./moments.ts";
 import { isRecord } from "./paths.ts";
 import { brief, type NumberContext, rangeText, readKey, readNumber, readValue } from "./read-number.ts";
+import { readReduction, readScatter, type ScatterReading, type Spot } from "./read-scatter.ts";
 import { type Place, resolveDistribution, showWith } from "./resolve-distribution.ts";
 import { checkStructure, shown } from "./structure.ts";
-import type { Distribution, Quantity, Scatter, UncertainQuantity } from "./study.ts";
+import type { Distribution, Quantity, UncertainQuantity } from "./study.ts";
 import { didYouMean } from "./suggest.ts";
 import { displayUnit, plainUnit } from "./units.ts";
-import { type VarianceFunction, varianceReduction } from "./variance-function.ts";
 
 export interface Reading {
   /** NaN where it could not be read; a problem then says why. */
   readonly quantity: Quantity;
   readonly source?: string;
-}
-
-interface Spot {
-  readonly path: string;
-  readonly field: Field;
-  readonly context: NumberContext;
 }
 
 /**
@@ -262,78 +250,6 @@ function readMeasured(raw: Record<string, unknown>, spot: Spot): Distribution | 
     return undefined;
   }
   return { kind: "measured", values, as, varianceReduction: reduction };
-}
-
-/** Γ² from `scale_of_fluctuation`, `averaged_over` and `averaging`; 1 without averaging. */
-function readReduction(raw: Record<string, unknown>, path: string, spot: Spot): number {
-  if (raw.averaged_over === undefined) return 1;
-  const over = readKey(raw.averaged_over, `${path}.averaged_over`, { type: "length" }, spot.field, spot.context);
-  if (raw.scale_of_fluctuation === undefined) {
-    spot.context.findings.problem(`${path}.averaged_over`, "averaged_over needs scale_of_fluctuation beside it");
-    return Number.NaN;
-  }
-  const scale = readKey(
-    raw.scale_of_fluctuation,
-    `${path}.scale_of_fluctuation`,
-    { type: "length" },
-    spot.field,
-    spot.context,
-  );
-  return varianceReduction((raw.averaging as VarianceFunction | undefined) ?? "simple", over, scale);
-}
-
-interface ScatterReading {
-  readonly scatter: Scatter;
-  readonly cov: number;
-  readonly knowledge: number;
-}
-
-/**
- * `cov² = Γ²·inherent² + (inherent² + measurement²)/tests + transformation²`; all but the first term is knowledge.
- *
- * @source Phoon and Kulhawy (1999), Can. Geotech. J. 36, 625–639
- */
-function readScatter(raw: Record<string, unknown>, kind: string, spot: Spot): ScatterReading | undefined {
-  const { context } = spot;
-  const path = `${spot.path}.scatter`;
-  const given = raw.scatter as Record<string, unknown>;
-  if (!distributionForms[kind]?.scatter) {
-    context.findings.keyProblem(
-      path,
-      `scatter cannot stand beside ${kind}: it takes the place of cov`,
-      "use normal or lognormal",
-    );
-    return undefined;
-  }
-  const read: Record<string, number> = {};
-  for (const [name, key] of Object.entries(scatterKeys)) {
-    if (given[name] !== undefined) read[name] = readKey(given[name], `${path}.${name}`, key, spot.field, context);
-    else if (key.default !== undefined) read[name] = key.default;
-  }
-  const reduction = readReduction(given, path, spot);
-  const { inherent, measurement, transformation, tests } = read as Record<
-    "inherent" | "measurement" | "transformation" | "tests",
-    number
-  >;
-  const natural = reduction * inherent ** 2;
-  const cov = Math.sqrt(natural + (inherent ** 2 + measurement ** 2) / tests + transformation ** 2);
-  if (cov === 0)
-    context.findings.problem(
-      path,
-      "scatter adds up to no spread at all",
-      "give at least one of inherent, measurement, transformation",
-    );
-  const scatter: Scatter = {
-    inherent,
-    ...(read.scale_of_fluctuation !== undefined && { scaleOfFluctuation: read.scale_of_fluctuation }),
-    ...(read.averaged_over !== undefined && { averagedOver: read.averaged_over }),
-    averaging: (given.averaging as VarianceFunction | undefined) ?? "simple",
-    measurement,
-    transformation,
-    tests,
-    varianceReduction: reduction,
-  };
-  return { scatter, cov: cov === 0 ? Number.NaN : cov, knowledge: 1 - natural / cov ** 2 };
 }
 
 /** The stated share of knowledge κ: of a yearly variable as given (0 without), else of scatter or of measured values. */

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { defaults, limitStateNames, studySchema } from "../../src/study/schema.ts";
+import { studySchema } from "../../src/study/schema.ts";
 import { checkStructure, knownKeys } from "../../src/study/structure.ts";
 import { everything, noPlaces, plain, read } from "./fixtures/read.ts";
 
@@ -26,8 +26,4 @@ test("the schema accepts the fixtures", () => {
     const findings = noPlaces();
     expect(checkStructure(studySchema, read(text).document, "", findings)).toBe(true);
   }
-});
-
-test("limit states that stand by default are limit states", () => {
-  for (const name of defaults.limitStates) expect(limitStateNames).toContain(name);
 });

@@ -88,7 +88,7 @@ describe("refused", () => {
 
   test("numbers that only a big integer holds become the nearest number", () => {
     expect(tree("a: 123456789012345678901234567890")).toEqual({
-      tree: { a: 123456789012345678901234567890 },
+      tree: { a: Number("123456789012345678901234567890") },
       problems: [],
     });
   });
