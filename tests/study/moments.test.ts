@@ -1,7 +1,10 @@
 import { describe, expect, test } from "vitest";
 import { integrate, panels } from "../../src/numeric/gauss-legendre.ts";
+import { marginalOf } from "../../src/probability/marginal-of.ts";
 import { distributionMean, distributionMoments, distributionSd, meanOf } from "../../src/study/moments.ts";
+import { quantitiesOf } from "../../src/study/quantities.ts";
 import type { Distribution } from "../../src/study/study.ts";
+import { fixture, read } from "./fixtures/read.ts";
 
 /** Mean and sd of an unnormalised density by composite quadrature: the second method beside the closed forms. */
 function byQuadrature(
@@ -119,4 +122,24 @@ describe("mean and sd in closed form", () => {
       meanOf({ distribution, yearly: false }),
     ]).toEqual([3, 2, 7, 3]);
   });
+});
+
+test("mean and sd are those of the marginals that sampling uses", () => {
+  const names = [
+    "everything",
+    "gravity",
+    "plain",
+    "../../../studies/two-soils-high-water/study",
+    "../../../studies/sloping-fill-us/study",
+  ];
+  const distributions = names.flatMap((name) =>
+    quantitiesOf(read(fixture(name))).flatMap(({ quantity }) =>
+      typeof quantity === "number" ? [] : [quantity.distribution],
+    ),
+  );
+  expect(new Set(distributions.map(({ kind }) => kind)).size).toBe(11);
+  for (const distribution of distributions) {
+    const { mean, sd } = marginalOf(distribution);
+    expectMoments(distribution, { mean, sd }, 1e-11);
+  }
 });
