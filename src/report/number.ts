@@ -1,6 +1,7 @@
 /** Numbers as an engineer writes them. */
 
-const thin = "\u2009";
+/** Narrow and not to be broken: what belongs together stays on one line. */
+const thin = "\u202f";
 const minus = "−";
 
 /** Three significant figures, without an exponent between 0.001 and 1 000 000; a true minus sign. */
@@ -60,6 +61,13 @@ export function indexText(index: number | null): string {
   if (index === null || !Number.isFinite(index)) return "–";
   if (index > 7) return "above 7";
   return index.toFixed(2).replace("-", minus);
+}
+
+/** A share of a whole in per cent: two figures, nothing below 0.1 %. */
+export function shareText(share: number): string {
+  const percent = 100 * share;
+  if (Math.abs(percent) < 0.1) return percent === 0 ? `0${thin}%` : `below 0.1${thin}%`;
+  return `${significant(percent, Math.abs(percent) >= 99.5 ? 3 : 2)}${thin}%`;
 }
 
 /** One sentence for an estimate: "about 1 in 240; between 1 in 225 and 1 in 255". Zero failures never read as safe. */

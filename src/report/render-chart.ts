@@ -28,8 +28,16 @@ const look = {
     gridColor: palette.grid,
     domainColor: palette.muted,
     tickColor: palette.muted,
+    labelLimit: 480,
   },
-  legend: { labelColor: palette.ink, titleColor: palette.ink, labelFontSize: 12, titleFontSize: 12, orient: "top" },
+  legend: {
+    labelColor: palette.ink,
+    titleColor: palette.ink,
+    labelFontSize: 12,
+    titleFontSize: 12,
+    orient: "top",
+    labelLimit: 300,
+  },
   header: { labelColor: palette.ink, titleColor: palette.ink, labelFontSize: 12 },
   title: { color: palette.ink, fontSize: 13, fontWeight: 600, anchor: "start" },
 } as const;

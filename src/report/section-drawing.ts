@@ -318,7 +318,14 @@ function waterMarks(s: Section, f: Frame, display: Display): string {
   };
   const out: string[] = [];
   if (s.water.behind !== undefined && s.water.behind > 0)
-    out.push(mark(f.x(f.right) - 60, s.water.behind, Math.max(s.baseWidth, s.toe + s.footWidth), f.right));
+    out.push(
+      mark(
+        f.x(Math.max(s.baseWidth, s.toe + s.footWidth)) + 14,
+        s.water.behind,
+        Math.max(s.baseWidth, s.toe + s.footWidth),
+        f.right,
+      ),
+    );
   if (s.water.front !== undefined && s.water.front > f.low) out.push(mark(f.x(f.left) + 16, s.water.front, f.left, 0));
   return out.join("");
 }
@@ -334,7 +341,8 @@ function soilNames(s: Section, f: Frame): string {
     top = bottom;
   }
   out.push(label(f.x(f.right) - 8, f.y(f.low) - 8, short(s.below.name), 'text-anchor="end"'));
-  if (s.front.level * f.scale > 34) out.push(label(f.x(f.left) + 4, f.y(0) - 6, short(s.front.name)));
+  if (s.front.soil !== s.below.soil && s.front.level * f.scale > 34)
+    out.push(label(f.x(f.left) + 4, f.y(0) - 6, short(s.front.name)));
   return out.join("");
 }
 
@@ -361,13 +369,19 @@ function dimensions(s: Section, f: Frame, display: Display): string {
     across(s.toe + s.footWidth, s.baseWidth, under, 18);
   }
   across(0, s.baseWidth, under, s.baseThickness > 0 ? 38 : 18);
-  const x = f.x(Math.min(0, s.toe)) - 14;
+  const x = f.x(0) - 16;
   upright(x, s.baseThickness, s.baseThickness + s.stemHeight);
-  if (s.baseThickness > 0) upright(x, 0, s.baseThickness);
+  if (s.baseThickness > 0) {
+    const beside = f.x(s.baseWidth) + 10;
+    out.push(
+      line(beside, f.y(0), beside, f.y(s.baseThickness), ink),
+      line(beside - 4, f.y(0), beside + 4, f.y(0), ink),
+    );
+    out.push(line(beside - 4, f.y(s.baseThickness), beside + 4, f.y(s.baseThickness), ink));
+    out.push(label(beside + 6, f.y(s.baseThickness / 2) + 4, display.number(s.baseThickness, "m"), 'font-size="11"'));
+  }
   across(s.toe + s.frontRun, s.toe + s.footWidth - s.backRun, s.baseThickness + s.stemHeight, -8);
-  out.push(
-    text(f.x(f.left), drawingHeight - 4, `Dimensions in ${display.unit("m")}`, `font-size="11" fill-opacity="0.75"`),
-  );
+  out.push(label(f.x(f.left) + 4, f.y(f.low) - 8, `Dimensions in ${display.unit("m")}`, 'font-size="11"'));
   return out.join("");
 }
 

@@ -27,6 +27,7 @@ caption{text-align:left;color:var(--muted);padding-bottom:.3rem}
 th,td{text-align:left;padding:.32rem .7rem .32rem 0;border-bottom:1px solid var(--grid);vertical-align:top}
 th{font-weight:600;border-bottom:1.5px solid var(--muted)}
 td.n,th.n{text-align:right}
+td.n{white-space:nowrap}
 tr.block th{padding-top:1rem;border-bottom:1px solid var(--muted);font-family:"Iowan Old Style",Palatino,Georgia,serif}
 td.formula{font-family:"Cambria Math",Cambria,Georgia,serif;overflow-wrap:anywhere}
 td .words{color:var(--muted)}

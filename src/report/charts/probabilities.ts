@@ -78,7 +78,14 @@ export function probabilityChart(result: AssessResult): Chart {
         },
         {
           transform: [{ filter: "datum.none" }],
-          mark: { type: "text", text: "none seen: below", align: "right", dx: -8, color: palette.muted, fontSize: 12 },
+          mark: {
+            type: "text",
+            text: "none seen, so below this",
+            align: "left",
+            dx: 8,
+            color: palette.muted,
+            fontSize: 12,
+          },
           encoding: { x: { field: "high", ...x }, y },
         },
         ...target,

@@ -33,13 +33,20 @@ export function sharesChart(result: AssessResult): Chart {
     alternative: `The largest: ${strongest.join("; ")}.`,
     spec: {
       data: { values },
-      facet: { column: { field: "state", type: "nominal", title: null, sort: null } },
+      facet: {
+        column: {
+          field: "state",
+          type: "nominal",
+          title: null,
+          sort: states.map(([name]) => capitalised(limitStateWords[name] ?? name)),
+        },
+      },
       spec: {
         width: 150,
         height: { step: 22 },
         mark: { type: "bar", color: palette.main, height: { band: 0.7 } },
         encoding: {
-          y: { field: "variable", type: "nominal", sort: null, title: null, axis: { labelLimit: 260 } },
+          y: { field: "variable", type: "nominal", sort: null, title: null, axis: { labelLimit: 480 } },
           x: { field: "share", type: "quantitative", title: "Share, %", axis: { tickCount: 4 } },
         },
       },

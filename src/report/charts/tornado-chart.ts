@@ -33,7 +33,7 @@ export function tornadoChart(result: AssessResult, name: string, state: LimitSta
         {
           mark: { type: "bar", height: { band: 0.7 } },
           encoding: {
-            y: { field: "variable", type: "nominal", sort: null, title: null, axis: { labelLimit: 280 } },
+            y: { field: "variable", type: "nominal", sort: null, title: null, axis: { labelLimit: 480 } },
             x: { field: "from", type: "quantitative", title: "Factor of safety", scale, axis: { tickCount: 6 } },
             x2: { field: "to" },
             color: {

@@ -20,7 +20,16 @@ export async function answerSection({ assess }: ReportInput): Promise<string> {
       `<li>${escapeHtml(`${capitalised(limitStateWords[name] ?? name)}: ${estimateSentence(state.monteCarlo)}.`)}</li>`,
   );
   const chart = probabilityChart(assess);
-  return `<section id="answer">${unfinished}<p class="answer">The probability that the wall fails by ${escapeHtml(list)} is <strong>${escapeHtml(estimateSentence(assess.system.monteCarlo))}</strong>.${escapeHtml(targetSentence(assess))}</p><ul>${sentences.join("")}</ul>${figure(pageSvg(await renderChart(chart), chart, escapeHtml), chart.title, "Bars are 95 % intervals of the sampling alone; what the numbers rest on stands further down.")}${probabilityTable(assess)}<p class="quiet">${escapeHtml(periodSentence(assess))}</p></section>`;
+  return `<section id="answer">${unfinished}<p class="answer">${answerSentence(assess.system.monteCarlo, list)}${escapeHtml(targetSentence(assess))}</p><ul>${sentences.join("")}</ul>${figure(pageSvg(await renderChart(chart), chart, escapeHtml), chart.title, "Bars are 95 % intervals of the sampling alone; what the numbers rest on stands further down.")}${probabilityTable(assess)}<p class="quiet">${escapeHtml(periodSentence(assess))}</p></section>`;
+}
+
+function answerSentence(mc: MonteCarloResult, list: string): string {
+  const how = escapeHtml(list);
+  if (mc.failures === 0)
+    return `<strong>None of ${escapeHtml(grouped(mc.samples))} samples failed</strong> by ${how}. That shows only that the probability is below ${escapeHtml(oneIn(mc.interval[1]))}.`;
+  if (mc.failures === mc.samples)
+    return `<strong>Every one of ${escapeHtml(grouped(mc.samples))} samples failed</strong> by ${how}.`;
+  return `The probability that the wall fails by ${how} is <strong>${escapeHtml(estimateSentence(mc))}</strong>.`;
 }
 
 function targetSentence(assess: AssessResult): string {

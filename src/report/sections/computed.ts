@@ -87,6 +87,11 @@ function forceTable({ check }: ReportInput, display: Display): string {
   );
 }
 
+/** z_w as z with a small w below: escaped first, so nothing but our own marks is markup. */
+export function withSubscripts(text: string): string {
+  return escapeHtml(text).replace(/_([A-Za-z0-9′γ]+(?:,[A-Za-z0-9]+)?)/g, "<sub>$1</sub>");
+}
+
 function sheetTable(sheet: readonly SheetLine[], display: Display): string {
   let block = "";
   const rows = sheet.map((line) => {
@@ -99,7 +104,7 @@ function sheetTable(sheet: readonly SheetLine[], display: Display): string {
     const source = line.source === undefined ? "" : ` <span class="words">(${escapeHtml(line.source)})</span>`;
     const numbers =
       line.substituted === "" || line.substituted === line.formula ? "" : `<br>= ${escapeHtml(line.substituted)}`;
-    return `${head}<tr><td class="formula">${escapeHtml(line.symbol)}</td><td>${escapeHtml(line.text)}${source}</td><td class="formula">${escapeHtml(line.formula)}${numbers}</td><td class="n">${escapeHtml(value)}</td></tr>`;
+    return `${head}<tr><td class="formula">${withSubscripts(line.symbol)}</td><td>${escapeHtml(line.text)}${source}</td><td class="formula">${withSubscripts(line.formula)}${numbers}</td><td class="n">${escapeHtml(value)}</td></tr>`;
   });
   return `<div class="scroll"><table><thead><tr><th scope="col">Symbol</th><th scope="col">What it is</th><th scope="col">Formula and numbers</th><th scope="col" class="n">Result</th></tr></thead><tbody>${rows.join("")}</tbody></table></div>`;
 }

@@ -5,7 +5,7 @@ import { tornadoChart } from "../charts/tornado-chart.ts";
 import { capitalised, type Display, limitStateWords } from "../display.ts";
 import { escapeHtml } from "../escape.ts";
 import { figure, htmlTable, paragraph, section } from "../markup.ts";
-import { significant } from "../number.ts";
+import { shareText, significant } from "../number.ts";
 import { type Chart, pageSvg, renderChart } from "../render-chart.ts";
 
 /** Which unknown drives the risk: shares, one at a time, and what the failures look like. */
@@ -55,9 +55,7 @@ function driverTable({ assess }: Pick<ReportInput, "assess">, display: Display):
       const shift = driver?.shiftGivenFailure;
       return [
         variable.label,
-        ...states.map(
-          ([, state]) => `${significant(100 * (state.firstOrderSecondMoment.contributions[variable.path] ?? 0), 2)} %`,
-        ),
+        ...states.map(([, state]) => shareText(state.firstOrderSecondMoment.contributions[variable.path] ?? 0)),
         picture === undefined ? "–" : display.quantity(picture.meanGivenFailure, variable.unit),
         shift === null || shift === undefined ? "–" : `${shift > 0 ? "+" : ""}${significant(shift, 2)}`,
         driver?.adverse ?? "–",
