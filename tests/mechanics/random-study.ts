@@ -210,12 +210,12 @@ export function randomStudy(seed: number, breadth: Breadth = "usual"): StudyTree
   return chance(0.2) ? atSiteLevel(tree, 40 + 10 * next()) : tree;
 }
 
-/** The same wall with every level counted from a site datum. */
-export function atSiteLevel(tree: StudyTree, underside: number): StudyTree {
+/** The same wall with every level raised: counted from a datum so much lower. */
+export function atSiteLevel(tree: StudyTree, rise: number): StudyTree {
   const raised = structuredClone(tree);
-  raised.wall.underside_level = underside;
-  raised.ground.front.level += underside;
-  for (const layer of raised.ground.behind.layers) if (layer.bottom !== undefined) layer.bottom += underside;
-  for (const pond of [raised.water.behind, raised.water.front]) if (pond) pond.level += underside;
+  raised.wall.underside_level = (tree.wall.underside_level ?? 0) + rise;
+  raised.ground.front.level += rise;
+  for (const layer of raised.ground.behind.layers) if (layer.bottom !== undefined) layer.bottom += rise;
+  for (const pond of [raised.water.behind, raised.water.front]) if (pond) pond.level += rise;
   return raised;
 }

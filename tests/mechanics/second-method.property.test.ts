@@ -36,8 +36,8 @@ function disagreements(tree: StudyTree): string[] {
 const isPlain = (tree: StudyTree): boolean => tree.model.earth_pressure !== "rankine" || tree.ground.behind.slope <= 45;
 
 for (const [breadth, numRuns] of [
-  ["usual", 400],
-  ["wide", 400],
+  ["usual", 200],
+  ["wide", 200],
 ] as [Breadth, number][])
   test(`forces, moments and factors of ${breadth} random walls agree with sums over slices`, () => {
     fc.assert(
