@@ -68,7 +68,7 @@ export function firstOrderSecondMoment(
 }
 
 /** No index above this is a finding; a spread of zero gives it. */
-const largestIndex = 40;
+const largestIndex = 1000;
 const held = (index: number): number => Math.min(Math.max(index, -largestIndex), largestIndex);
 
 /** The two indices and probabilities of a factor of safety with this mean and standard deviation. */

@@ -34,7 +34,8 @@ export function importFaults({ file, text }: Source): readonly string[] {
   const faults = importsOf(text).flatMap((target) => faultOf(file, room, target) ?? []);
   if (!onMachine.includes(room)) {
     const code = withoutComments(text);
-    for (const [name, pattern] of machineGlobals) if (pattern.test(code)) faults.push(`${file}: uses ${name}, which only ${onMachine.join(" and ")} may`);
+    for (const [name, pattern] of machineGlobals)
+      if (pattern.test(code)) faults.push(`${file}: uses ${name}, which only ${onMachine.join(" and ")} may`);
   }
   return faults;
 }
@@ -60,13 +61,18 @@ function withoutComments(text: string): string {
 
 function faultOf(file: string, room: string, target: string): string | undefined {
   if (!target.startsWith(".")) {
-    return target.startsWith("node:") && !onMachine.includes(room) ? `${file}: imports ${target}; only ${onMachine.join(" and ")} may` : undefined;
+    return target.startsWith("node:") && !onMachine.includes(room)
+      ? `${file}: imports ${target}; only ${onMachine.join(" and ")} may`
+      : undefined;
   }
   if (!target.endsWith(".ts")) return `${file}: imports ${target} without its ending .ts`;
   const to = resolve(file, target);
   const toRoom = roomOf(to);
   if (room === "" || toRoom === room || toRoom === "numeric") return undefined;
-  if (toRoom === "") return shared.includes(to) || outermost.includes(room) ? undefined : `${file}: imports ${to}, a bridge above its room`;
+  if (toRoom === "")
+    return shared.includes(to) || outermost.includes(room)
+      ? undefined
+      : `${file}: imports ${to}, a bridge above its room`;
   if (above[room] === undefined) return `${file}: lies in ${room}/, a room that the rules do not know`;
   return above[room].includes(toRoom) ? undefined : `${file}: ${room}/ must not import ${toRoom}/`;
 }

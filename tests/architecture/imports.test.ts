@@ -9,14 +9,28 @@ const files = readdirSync(source, { recursive: true, encoding: "utf8" }).filter(
 describe("the rooms of the source", () => {
   test("data flows one way: no file imports from a room below its own, or touches the machine from an inner room", () => {
     expect(files.length).toBeGreaterThan(50);
-    const faults = files.flatMap((file) => importFaults({ file: file.replaceAll("\\", "/"), text: readFileSync(join(source, file), "utf8") }));
+    const faults = files.flatMap((file) =>
+      importFaults({ file: file.replaceAll("\\", "/"), text: readFileSync(join(source, file), "utf8") }),
+    );
     expect(faults).toEqual([]);
   });
 
   test.each([
-    ["probability/normal.ts", 'import { prepareWall } from "../mechanics/prepare-wall.ts";', "probability/ must not import mechanics/"],
-    ["reliability/a.ts", 'import type { Kernel } from "../mechanics/kernel.ts";', "reliability/ must not import mechanics/"],
-    ["study/a.ts", 'import { marginalOf } from "../probability/marginal-of.ts";', "study/ must not import probability/"],
+    [
+      "probability/normal.ts",
+      'import { prepareWall } from "../mechanics/prepare-wall.ts";',
+      "probability/ must not import mechanics/",
+    ],
+    [
+      "reliability/a.ts",
+      'import type { Kernel } from "../mechanics/kernel.ts";',
+      "reliability/ must not import mechanics/",
+    ],
+    [
+      "study/a.ts",
+      'import { marginalOf } from "../probability/marginal-of.ts";',
+      "study/ must not import probability/",
+    ],
     ["mechanics/stages/a.ts", 'import { x } from "../../report/number.ts";', "mechanics/ must not import report/"],
     ["report/a.ts", 'import { buildModel } from "../model.ts";', "a bridge above its room"],
     ["numeric/a.ts", 'import type { Study } from "../study/study.ts";', "numeric/ must not import study/"],
@@ -37,7 +51,10 @@ describe("the rooms of the source", () => {
       { file: "mechanics/a.ts", text: 'import type { Study } from "../study/study.ts"; // process.env is for cli' },
       { file: "drivers/a.ts", text: 'import { normalCdf } from "../numeric/normal.ts";' },
       { file: "report/a.ts", text: 'import type { CheckResult } from "../results.ts";' },
-      { file: "cli/a.ts", text: 'import { assess } from "../assess.ts"; import { readFile } from "node:fs/promises"; process.exit(0);' },
+      {
+        file: "cli/a.ts",
+        text: 'import { assess } from "../assess.ts"; import { readFile } from "node:fs/promises"; process.exit(0);',
+      },
       { file: "assess.ts", text: 'import { tornado } from "./drivers/tornado.ts";' },
     ];
     expect(allowed.flatMap(importFaults)).toEqual([]);

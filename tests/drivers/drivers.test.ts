@@ -5,15 +5,20 @@ import { tornado } from "../../src/drivers/tornado.ts";
 import { createBlockCounter } from "../../src/reliability/block-tally.ts";
 import { localRunner } from "../../src/reliability/local-runner.ts";
 import { histogramEdges, monteCarlo } from "../../src/reliability/monte-carlo.ts";
-import { problemOf } from "../reliability/straight-line.ts";
+import { problemOf } from "../reliability/known-problems.ts";
 
 const normal = (mean: number, sd: number) => ({ kind: "normal", mean, sd }) as const;
 // F = 1 + margin/100, margin = x − y + 2: fails where x is low and y is high; z plays no part.
-const problem = problemOf({ "a.x": normal(0, 1), "b.y": normal(0, 1), "c.z": normal(5, 2) }, { sliding: ([x, y]) => 1 + (x - y + 2) / 100 });
+const problem = problemOf(
+  { "a.x": normal(0, 1), "b.y": normal(0, 1), "c.z": normal(5, 2) },
+  { sliding: ([x, y]) => 1 + (x - y + 2) / 100 },
+);
 
 async function picture() {
   const plan = { seed: "drivers", purpose: "test", samples: 60_000, centres: [1], edges: [histogramEdges(1, 0.01)] };
-  const run = await monteCarlo(plan, localRunner(createBlockCounter(problem.states, problem.space, plan)), { precision: 0 });
+  const run = await monteCarlo(plan, localRunner(createBlockCounter(problem.states, problem.space, plan)), {
+    precision: 0,
+  });
   return failurePicture(problem.space, run.states[0]);
 }
 
@@ -45,9 +50,20 @@ describe("the tornado and the table of drivers", () => {
   test("put the widest bar first and find the harmful end", async () => {
     const [bars] = tornado(problem.states, problem.space);
     expect(bars.at(-1)).toEqual({ path: "c.z", factorAt5: 1.02, factorAt95: 1.02 });
-    expect(bars[0].factorAt95 - bars[0].factorAt5).toBeCloseTo(((bars[0].path === "a.x" ? 1 : -1) * 2 * 1.6448536269514722) / 100, 12);
-    const table = driverTable(problem.space, { shares: { "a.x": 0.5, "b.y": 0.5, "c.z": 0 }, tornado: bars, picture: await picture() });
-    expect(Object.fromEntries(table.map((row) => [row.path, row.adverse]))).toEqual({ "a.x": "low", "b.y": "high", "c.z": "unclear" });
+    expect(bars[0].factorAt95 - bars[0].factorAt5).toBeCloseTo(
+      ((bars[0].path === "a.x" ? 1 : -1) * 2 * 1.6448536269514722) / 100,
+      12,
+    );
+    const table = driverTable(problem.space, {
+      shares: { "a.x": 0.5, "b.y": 0.5, "c.z": 0 },
+      tornado: bars,
+      picture: await picture(),
+    });
+    expect(Object.fromEntries(table.map((row) => [row.path, row.adverse]))).toEqual({
+      "a.x": "low",
+      "b.y": "high",
+      "c.z": "unclear",
+    });
     expect(table.at(-1)?.path).toBe("c.z");
   });
 
@@ -55,7 +71,10 @@ describe("the tornado and the table of drivers", () => {
     const [bars] = tornado(problem.states, problem.space);
     const table = driverTable(problem.space, { tornado: bars, picture: [] });
     expect(table.map((row) => row.shiftGivenFailure)).toEqual([null, null, null]);
-    expect(Object.fromEntries(table.map((row) => [row.path, row.adverse]))).toMatchObject({ "a.x": "low", "b.y": "high" });
+    expect(Object.fromEntries(table.map((row) => [row.path, row.adverse]))).toMatchObject({
+      "a.x": "low",
+      "b.y": "high",
+    });
   });
 
   test("cautious values stand at the adverse 5 % fractile, what does not matter at its mean", () => {
