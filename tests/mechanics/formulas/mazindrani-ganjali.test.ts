@@ -5,6 +5,7 @@ import {
   slopingCohesiveForce,
   slopingCohesiveMoment,
   slopingCohesivePressure,
+  slopingCohesiveThrust,
 } from "../../../src/mechanics/formulas/mazindrani-ganjali.ts";
 import {
   activeCoefficientRankine,
@@ -123,4 +124,20 @@ test("a stretch without length, and stress below the turning point, give nothing
   expect(slopingCohesiveForce(0, 100, 0, 10, 0.5, 0.2)).toBe(0);
   expect(slopingCohesiveMoment(0, 100, 0, 10, 0.5, 0.2)).toBe(0);
   expect(slopingCohesiveForce(0, 5, 2, 10, 0.5, 0.2)).toBe(0);
+});
+
+test("force and moment in one go are those taken one by one", () => {
+  const into = new Float64Array(2);
+  for (const [s0, s1, c] of [
+    [0, 100, 10],
+    [100, 20, 5],
+    [0, 100, 0],
+    [0, 5, 10],
+  ]) {
+    slopingCohesiveThrust(into, s0, s1, 4, c, 0.5, 0.6);
+    expect([...into]).toEqual([
+      slopingCohesiveForce(s0, s1, 4, c, 0.5, 0.6),
+      slopingCohesiveMoment(s0, s1, 4, c, 0.5, 0.6),
+    ]);
+  }
 });
