@@ -75,7 +75,10 @@ export async function monteCarlo(
     const tally = await waiting.get(block);
     if (tally === undefined) throw new RangeError(`block ${block} was never asked for`);
     waiting.delete(block);
-    if (options.signal?.aborted && block > 0) return { ...run, complete: false };
+    if (options.signal?.aborted && block > 0) {
+      run.complete = false;
+      break;
+    }
     mergeInto(run, tally);
     options.onProgress?.(run.samples, plan.samples);
     if (worthShowing(block + 1) || block + 1 === blocks) notePoint(run);
@@ -84,7 +87,7 @@ export async function monteCarlo(
     if (options.precision > 0 && spread(run.system.failures, run.samples) <= options.precision) break;
   }
   if (run.system.convergence.at(-1)?.samples !== run.samples) notePoint(run);
-  return { ...run, complete: true };
+  return run;
 }
 
 /** Coefficient of variation of a plain estimate; infinite without failures. */

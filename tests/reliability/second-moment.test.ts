@@ -6,7 +6,7 @@ import {
   oneAtATime,
   secondMomentIndices,
 } from "../../src/reliability/second-moment.ts";
-import { spaceOf, statesOf } from "./known-problems.ts";
+import { spaceOf, statesOf } from "./straight-line.ts";
 
 const normal = (mean: number, sd: number) => marginalOf({ kind: "normal", mean, sd });
 const independent = (): number => 0;
@@ -49,15 +49,15 @@ test("correlation enters the variance, and a share can be negative", () => {
 test("a factor that nothing moves has no spread and shares of 0", () => {
   const space = spaceOf([normal(3, 1)]);
   const [moment] = firstOrderSecondMoment(statesOf(space, { fixed: () => 1.5 }), space, independent);
-  expect(moment).toMatchObject({ mean: 1.5, sd: 0, reliabilityIndexNormal: 40, reliabilityIndexLognormal: 40 });
+  expect(moment).toMatchObject({ mean: 1.5, sd: 0, reliabilityIndexNormal: 1000, reliabilityIndexLognormal: 1000 });
   expect(moment.contributions.x1).toBe(0);
   expect(moment.probabilityNormal).toBeLessThan(1e-300);
 });
 
 test("a factor of 0 at the means fails for certain, without a number that is none", () => {
   const indices = secondMomentIndices(0, 0);
-  expect(indices.reliabilityIndexNormal).toBe(-40);
-  expect(indices.reliabilityIndexLognormal).toBe(-40);
+  expect(indices.reliabilityIndexNormal).toBe(-1000);
+  expect(indices.reliabilityIndexLognormal).toBe(-1000);
   expect(indices.probabilityNormal).toBe(1);
   expect(Object.values(secondMomentIndices(0, 0.3)).every(Number.isFinite)).toBe(true);
 });

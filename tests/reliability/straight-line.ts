@@ -1,57 +1,87 @@
-import { marginalOf } from "../../src/probability/marginal-of.ts";
 import type { JointSpace, Marginal } from "../../src/probability/marginal.ts";
-import type { LimitStates } from "../../src/reliability/limit-states.ts";
-import type { Distribution } from "../../src/study/study.ts";
+import { marginalOf } from "../../src/probability/marginal-of.ts";
+import type { Columns, LimitStates } from "../../src/reliability/limit-states.ts";
 
-/** A problem with a known answer: named factors of physical values, drawn independently. */
-export interface Problem {
-  readonly states: LimitStates;
-  readonly space: JointSpace;
-}
+/** Functions of the unknowns' values, by the name of their limit state. */
+export type FunctionsOf = Readonly<Record<string, (x: readonly number[]) => number>>;
 
-export function independentSpace(marginals: Readonly<Record<string, Marginal>>): JointSpace {
-  const entries = Object.entries(marginals);
+export const standardNormal: Marginal = marginalOf({ kind: "normal", mean: 0, sd: 1 });
+
+/** A space of independent unknowns x1, x2, …, or with rows of its own (u = rows · z, each of unit length). */
+export function spaceOf(
+  marginals: readonly Marginal[],
+  rows: readonly (readonly number[])[] = marginals.map((_, i) => marginals.map((_, j) => (i === j ? 1 : 0))),
+): JointSpace {
   return {
-    unknowns: entries.map(([path, marginal]) => ({ path, marginal, knowledge: 1, yearly: false })),
-    coordinates: entries.map(([path]) => ({ key: path, part: "knowledge", yearly: false })),
-    rows: entries.map((_, i) => Float64Array.from(entries, (_, j) => (i === j ? 1 : 0))),
+    unknowns: marginals.map((marginal, i) => ({ path: `x${i + 1}`, marginal, knowledge: 1, yearly: false })),
+    coordinates: rows[0].map((_, j) => ({ key: `x${j + 1}`, part: "knowledge", yearly: false })),
+    rows: rows.map((row) => Float64Array.from(row)),
   };
 }
 
-/** Factors of safety of x, one function per limit state, over independent unknowns. */
-export function problemOf(distributions: Readonly<Record<string, Distribution>>, factors: Readonly<Record<string, (x: readonly number[]) => number>>, markOf: (x: readonly number[]) => number = () => 0): Problem {
-  const space = independentSpace(Object.fromEntries(Object.entries(distributions).map(([path, distribution]) => [path, marginalOf(distribution)])));
-  const names = Object.keys(factors);
-  const x = space.unknowns.map(() => 0);
+export function standardSpace(dimension: number): JointSpace {
+  return spaceOf(Array.from({ length: dimension }, () => standardNormal));
+}
+
+/** Limit states over a space, from factors as functions of the values; held to [0, 1000] as a wall's are. */
+export function statesOf(
+  space: JointSpace,
+  factorsOf: FunctionsOf,
+  capacity = 512,
+  markOf: (x: readonly number[]) => number = () => 0,
+): LimitStates {
+  const functions = Object.values(factorsOf);
+  const size = space.unknowns.length;
+  const x = new Array<number>(size).fill(0);
   const evaluations = { exact: 0, batched: 0 };
-  const at = (fill: (place: number, sample: number) => number, n: number, out: readonly Float64Array[], marks: Uint8Array): void => {
-    for (let i = 0; i < n; i++) {
-      for (let v = 0; v < x.length; v++) x[v] = fill(v, i);
-      names.forEach((name, k) => {
-        out[k][i] = Math.min(Math.max(factors[name](x), 0), 1000);
-      });
-      marks[i] = markOf(x);
-    }
+  const write = (factors: Columns, marks: Uint8Array, i: number): void => {
+    for (let k = 0; k < functions.length; k++) factors[k][i] = Math.min(Math.max(functions[k](x), 0), 1000);
+    marks[i] = markOf(x);
   };
-  const states: LimitStates = {
-    dimension: x.length,
+  const check = (n: number): void => {
+    if (n > capacity) throw new RangeError(`${n} points exceed the capacity of ${capacity}`);
+  };
+  return {
+    dimension: space.coordinates.length,
     keys: space.coordinates.map((coordinate) => coordinate.key),
-    names,
-    capacity: 512,
+    names: Object.keys(factorsOf),
+    capacity,
     evaluations,
-    evaluate(z, n, out, marks, exact) {
+    evaluate(z, n, factors, marks, exact) {
+      check(n);
+      for (let i = 0; i < n; i++) {
+        for (let v = 0; v < size; v++) {
+          const row = space.rows[v];
+          let u = 0;
+          for (let j = 0; j < row.length; j++) u += row[j] * z[j][i];
+          const { marginal } = space.unknowns[v];
+          x[v] = marginal === standardNormal ? u : marginal.quantileOfNormal(u);
+        }
+        write(factors, marks, i);
+      }
       evaluations[exact ? "exact" : "batched"] += n;
-      at((v, i) => space.unknowns[v].marginal.quantileOfNormal(z[v][i]), n, out, marks);
     },
-    evaluateAt(values, n, out, marks) {
+    evaluateAt(values, n, factors, marks) {
+      check(n);
+      for (let i = 0; i < n; i++) {
+        for (let v = 0; v < size; v++) x[v] = values[v][i];
+        write(factors, marks, i);
+      }
       evaluations.exact += n;
-      at((v, i) => values[v][i], n, out, marks);
     },
   };
-  return { states, space };
 }
 
-/** A straight line in one standard normal variable with the given index of reliability: F < 1 where z < −index. */
-export function straightLine(index: number): Problem {
-  return problemOf({ "line.z": { kind: "normal", mean: 0, sd: 1 } }, { line: ([z]) => (z + index > -999 ? 1 + (z + index) / 1000 : 0) });
+/** Limit states over independent standard normals from margins, failure where one is below 0: F = exp(g/scale). */
+export function statesOfMargins(dimension: number, margins: FunctionsOf, scale = 1): LimitStates {
+  const factors = Object.entries(margins).map(
+    ([name, g]) => [name, (u: readonly number[]) => Math.exp(g(u) / scale)] as const,
+  );
+  return statesOf(standardSpace(dimension), Object.fromEntries(factors));
+}
+
+/** g = b − Σu/√d: the probability of failure is Φ(−b), whatever the dimension. */
+export function straightLine(reliabilityIndex: number, dimension = 2): LimitStates {
+  const sum = (u: readonly number[]): number => u.reduce((total, value) => total + value, 0);
+  return statesOfMargins(dimension, { line: (u) => reliabilityIndex - sum(u) / Math.sqrt(dimension) });
 }
