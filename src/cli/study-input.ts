@@ -1,7 +1,7 @@
 import { type Command, InvalidArgumentError, Option } from "commander";
 import { readStudy } from "../study/read-study.ts";
 import type { Study } from "../study/study.ts";
-import { type Io, readInput, UsageError } from "./io.ts";
+import { type Io, readInput } from "./io.ts";
 
 /** Options that every command on a study takes. */
 export interface CommonOptions {
@@ -108,26 +108,4 @@ export function withText<T>(text: string, run: () => T): T {
   } catch (error) {
     throw new StudyTextError(error, text);
   }
-}
-
-/** Where a study gives the point of a calculation: a file of path: value. */
-export async function readValues(file: string, io: Io): Promise<Record<string, number>> {
-  const text = await readInput(file, io);
-  const { parse } = await import("yaml");
-  let tree: unknown;
-  try {
-    tree = parse(text);
-  } catch (error) {
-    throw new UsageError(`${file} is not YAML: ${(error as Error).message.split("\n")[0]}`);
-  }
-  if (typeof tree !== "object" || tree === null || Array.isArray(tree))
-    throw new UsageError(`${file} should hold lines of path: value`);
-  const entries = Object.entries(tree).map(([path, value]) => {
-    if (typeof value !== "number" || !Number.isFinite(value))
-      throw new UsageError(
-        `${file}: ${path} should be a number, in the units of the result file, not ${JSON.stringify(value)}`,
-      );
-    return [path, value] as const;
-  });
-  return Object.fromEntries(entries);
 }

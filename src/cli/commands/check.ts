@@ -2,8 +2,8 @@ import type { Command } from "commander";
 import type { CheckOptions } from "../../check.ts";
 import type { Study } from "../../study/study.ts";
 import { deliver } from "../deliver.ts";
-import { type Io, UsageError } from "../io.ts";
-import { addCommonOptions, type CommonOptions, loadStudy, readValues, withText } from "../study-input.ts";
+import { type Io, readInput, UsageError } from "../io.ts";
+import { addCommonOptions, type CommonOptions, loadStudy, withText } from "../study-input.ts";
 
 interface Options extends CommonOptions {
   readonly at: string;
@@ -42,5 +42,7 @@ async function pointOf(study: Study, at: string, text: string, io: Io): Promise<
     return withText(text, () => cautiousPoint(study));
   }
   if (at.startsWith("design_point")) throw new UsageError("--at design_point is not available in this version");
-  return { name: at, values: await readValues(at, io) };
+  const values = await readInput(at, io);
+  const { readValues } = await import("../../study/read-values.ts");
+  return { name: at, values: withText(values, () => readValues(values, study, at)) };
 }
