@@ -7,6 +7,7 @@ import { mechanicsNotes } from "./mechanics/notes.ts";
 import { createWorkspace } from "./mechanics/workspace.ts";
 import { buildModel, type Model, unknownsOf } from "./model.ts";
 import { assessmentNotes } from "./notes.ts";
+import { normalUpperQuantile } from "./numeric/normal.ts";
 import { createBlockCounter, type SamplingPlan } from "./reliability/block-tally.ts";
 import { localRunner } from "./reliability/local-runner.ts";
 import {
@@ -17,12 +18,14 @@ import {
   monteCarlo,
   monteCarloResult,
 } from "./reliability/monte-carlo.ts";
+import { type PeriodResult, periodProbability, yearlyGivenSurvival } from "./reliability/period.ts";
 import { firstOrderSecondMoment } from "./reliability/second-moment.ts";
 import { systemBounds } from "./reliability/system-bounds.ts";
 import type {
   AssessResult,
   BestEstimate,
   LimitStateAssessment,
+  PeriodAssessment,
   SecondMomentResult,
   SystemAssessment,
   TornadoBar,
@@ -69,11 +72,12 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     ...(options.onProgress === undefined ? {} : { onProgress: options.onProgress }),
     ...(options.signal === undefined ? {} : { signal: options.signal }),
   });
+  const period = await periodOf(model, seed, options, run.complete);
   const seconds = (options.clock?.() ?? 0) - start;
   const limitStates = Object.fromEntries(
     states.names.map((name, k) => [name, limitStateAssessment(model, run, plan, k, secondMoment[k], bars[k])]),
   ) as Partial<Record<LimitStateName, LimitStateAssessment>>;
-  const system = systemAssessment(model, run, limitStates);
+  const system = systemAssessment(model, run, limitStates, period);
   const variables = variableSummaries(study, unknownsOf(study, kernel), space);
   const columns = columnsAtMeans(model);
   const { target } = study.assessment;
@@ -90,8 +94,8 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
       version,
       seed,
       workers: options.workers ?? 1,
-      complete: run.complete,
-      sampling: { evaluations: run.samples, seconds },
+      complete: run.complete && (period?.complete ?? true),
+      sampling: { evaluations: run.samples + (period?.evaluations ?? 0), seconds },
     },
     warnings: [],
     cautions,
@@ -140,11 +144,13 @@ function systemAssessment(
   model: Model,
   run: MonteCarloRun,
   limitStates: Partial<Record<LimitStateName, LimitStateAssessment>>,
+  period: PeriodResult | undefined,
 ): SystemAssessment {
   const picture = failurePicture(model.space, run.system);
   const each = Object.values(limitStates).map((state) => state.monteCarlo.probability);
   return {
     monteCarlo: monteCarloResult(run, run.system),
+    ...(period === undefined ? {} : { period: periodAssessment(period) }),
     bounds: systemBounds(each),
     drivers: driverTable(model.space, { picture }),
     failurePicture: picture,
@@ -152,12 +158,58 @@ function systemAssessment(
   };
 }
 
+/** Where something in the study is yearly, whole periods are drawn too. */
+async function periodOf(
+  model: Model,
+  seed: string,
+  options: AssessOptions,
+  goOn: boolean,
+): Promise<PeriodResult | undefined> {
+  const { period, samples, precision } = model.study.assessment;
+  if (period === undefined || !goOn || !model.space.coordinates.some((coordinate) => coordinate.yearly))
+    return undefined;
+  return periodProbability(model.states, model.space, {
+    seed,
+    years: period,
+    evaluations: options.samples ?? samples,
+    precision: options.precision ?? precision,
+    ...(options.signal === undefined ? {} : { signal: options.signal }),
+    ...(options.onProgress === undefined ? {} : { onProgress: options.onProgress }),
+  });
+}
+
+function periodAssessment(period: PeriodResult): PeriodAssessment {
+  const { years, probability, standardError, interval, periods, failures } = period;
+  return {
+    years,
+    probability,
+    standardError,
+    interval,
+    periods,
+    failures,
+    yearlyGivenSurvival: yearlyGivenSurvival(period),
+  };
+}
+
+/** Of the period where there is one, of the ground as it is elsewhere. */
 function plainEstimate(study: Study, system: SystemAssessment): BestEstimate {
-  const { probability, standardError, interval, reliabilityIndex, samples } = system.monteCarlo;
+  const { period } = system;
+  const { probability, standardError, interval } = period ?? system.monteCarlo;
+  const reliabilityIndex = probability > 0 && probability < 1 ? normalUpperQuantile(probability) : null;
+  const evaluations = period === undefined ? system.monteCarlo.samples : period.periods * period.years;
   const { target } = study.assessment;
   // Met only where the whole interval lies below the target: an unresolved tail is not a proof.
   const meets = target === undefined ? {} : { meetsTarget: interval[1] <= target.probability };
-  return { method: "plain", probability, standardError, interval, reliabilityIndex, evaluations: samples, ...meets };
+  return {
+    method: "plain",
+    probability,
+    standardError,
+    interval,
+    reliabilityIndex,
+    evaluations,
+    ...(period === undefined ? {} : { years: period.years }),
+    ...meets,
+  };
 }
 
 function columnsAtMeans(model: Model): readonly Float64Array[] {

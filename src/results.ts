@@ -250,8 +250,22 @@ export interface LimitStateAssessment {
   readonly convergence: readonly ConvergencePoint[];
 }
 
+/** Where the study has yearly values: failure in any year of the period. */
+export interface PeriodAssessment {
+  readonly years: number;
+  readonly probability: number;
+  readonly standardError: number;
+  readonly interval: readonly [number, number];
+  /** Periods that were drawn, and those in which the wall failed. */
+  readonly periods: number;
+  readonly failures: number;
+  /** Probability of failing in each year, given that the wall stood until then; null once no period stands. */
+  readonly yearlyGivenSurvival: readonly (number | null)[];
+}
+
 export interface SystemAssessment {
   readonly monteCarlo: MonteCarloResult;
+  readonly period?: PeriodAssessment;
   readonly bounds: readonly [number, number];
   readonly drivers: readonly Driver[];
   readonly failurePicture: readonly FailurePicture[];

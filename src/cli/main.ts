@@ -1,5 +1,6 @@
 import { Command, CommanderError } from "commander";
 import { StudyError } from "../errors.ts";
+import { placeProblems } from "../study/place-problems.ts";
 import { version } from "../version.ts";
 import { addAssess } from "./commands/assess.ts";
 import { addCheck } from "./commands/check.ts";
@@ -52,7 +53,8 @@ function failure(error: unknown, io: Io): number {
   }
   const cause = error instanceof StudyTextError ? error.cause : error;
   if (cause instanceof StudyError) {
-    io.err(problemText(cause, error instanceof StudyTextError ? error.text : ""));
+    const placed = error instanceof StudyTextError ? placeProblems(cause, error.text, error.file) : cause;
+    io.err(problemText(placed, error instanceof StudyTextError ? error.text : ""));
     return exitCode.studyWrong;
   }
   if (cause instanceof UsageError) return failure(cause, io);

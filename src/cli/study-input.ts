@@ -85,11 +85,14 @@ export interface StudyInput {
 /** Keeps the text beside a failure, so that the message can show the line. */
 export class StudyTextError extends Error {
   readonly text: string;
+  /** For problems that do not name it themselves. */
+  readonly file: string;
   override readonly cause: unknown;
-  constructor(cause: unknown, text: string) {
+  constructor(cause: unknown, text: string, file = "") {
     super("the study is wrong");
     this.cause = cause;
     this.text = text;
+    this.file = file;
   }
 }
 
@@ -102,10 +105,10 @@ export async function loadStudy(file: string, options: CommonOptions, io: Io): P
 }
 
 /** Runs something that may find the study wrong; the error then carries the text. */
-export function withText<T>(text: string, run: () => T): T {
+export function withText<T>(text: string, run: () => T, file = ""): T {
   try {
     return run();
   } catch (error) {
-    throw new StudyTextError(error, text);
+    throw new StudyTextError(error, text, file);
   }
 }

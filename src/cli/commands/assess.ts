@@ -59,7 +59,7 @@ export async function runAssess({ study, text }: StudyInput, options: SamplingOp
       onProgress: (done, of) => progress.update(done, of),
     });
   } catch (error) {
-    throw new StudyTextError(error, text);
+    throw new StudyTextError(error, text, study.file);
   } finally {
     progress.stop();
   }

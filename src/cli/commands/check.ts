@@ -26,7 +26,7 @@ export function addCheck(program: Command, io: Io): void {
       const { study, text } = await loadStudy(file, options, io);
       const { check } = await import("../../check.ts");
       const at = await pointOf(study, options.at, text, io);
-      const result = withText(text, () => check(study, { at }));
+      const result = withText(text, () => check(study, { at }), study.file);
       const { resultJson } = await import("../../report/result-json.ts");
       if (options.json) return deliver(resultJson(result), options, file, io);
       const { terminalCheck } = await import("../../report/terminal-check.ts");
@@ -39,7 +39,7 @@ async function pointOf(study: Study, at: string, text: string, io: Io): Promise<
   if (at === "mean") return "mean";
   if (at === "cautious") {
     const { cautiousPoint } = await import("../../assess.ts");
-    return withText(text, () => cautiousPoint(study));
+    return withText(text, () => cautiousPoint(study), study.file);
   }
   if (at.startsWith("design_point")) throw new UsageError("--at design_point is not available in this version");
   const values = await readInput(at, io);

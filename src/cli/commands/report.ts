@@ -13,7 +13,7 @@ export function addReport(program: Command, io: Io, end: (code: number) => void)
       const input = await loadStudy(file, options, io);
       const { check } = await import("../../check.ts");
       const { htmlReport } = await import("../../report/html-report.ts");
-      const checked = withText(input.text, () => check(input.study));
+      const checked = withText(input.text, () => check(input.study), input.study.file);
       const assessed = await runAssess(input, options, io);
       const page = await htmlReport({ study: input.study, check: checked, assess: assessed });
       const target = options.output ?? "report.html";
