@@ -17,6 +17,7 @@ export const normalTailLimit = 37.5;
  * square to be exact.
  */
 function gaussian(z: number): number {
+  if (Math.abs(z) > 39) return 0; // exp(−760) underflows; ±∞ has no head
   const head = Math.trunc(z * 16) / 16;
   return Math.exp(-0.5 * head * head) * Math.exp(-0.5 * (z - head) * (z + head));
 }

@@ -31,6 +31,11 @@ test("the quantile meets the ends and the middle", () => {
   expect(normalQuantile(0.5)).toBe(0);
 });
 
+test("at infinity nothing or everything is left", () => {
+  const infinity = Number.POSITIVE_INFINITY;
+  expect([normalPdf(infinity), normalUpper(infinity), normalCdf(infinity), normalUpper(-infinity)]).toEqual([0, 0, 1, 1]);
+});
+
 test("a number that is no probability is refused by its value", () => {
   expect(() => normalQuantile(1.5)).toThrow(new RangeError("1.5 is no probability"));
   expect(() => normalQuantile(Number.NaN)).toThrow(RangeError);
