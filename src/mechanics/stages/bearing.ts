@@ -10,6 +10,7 @@ import {
   inclinationNc,
   inclinationNgamma,
   inclinationNq,
+  leastDrainedFrictionAngle,
   meyerhofInclinationNgamma,
   meyerhofInclinationNq,
   undrainedInclination,
@@ -22,11 +23,10 @@ import { finish } from "./sliding.ts";
 import type { Ponds } from "./water.ts";
 
 /** Drained formulas below φ′ = 0.1° are taken at 0.1°. */
-const leastAngle = (0.1 * Math.PI) / 180;
-const atLeast = (frictionAngle: number): number => Math.max(frictionAngle, leastAngle);
+const atLeast = (frictionAngle: number): number => Math.max(frictionAngle, leastDrainedFrictionAngle);
 const cotangent = (frictionAngle: number): number => 1 / Math.tan(atLeast(frictionAngle));
 const tangent = (frictionAngle: number): number => Math.tan(atLeast(frictionAngle));
-const kink = (): readonly number[] => [leastAngle];
+const kink = (): readonly number[] => [leastDrainedFrictionAngle];
 
 /** γ′ = γ_b + (γ − γ_b) min(d/B′, 1), d the depth of the water below the underside. */
 export function unitWeightBelow(moist: number, saturated: number, depth: number, effectiveWidth: number): number {

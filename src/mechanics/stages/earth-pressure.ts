@@ -1,10 +1,6 @@
 import { columnwise } from "../columnwise.ts";
 import { positiveForce, positiveMoment, zeroCrossing } from "../formulas/linear-pressure.ts";
-import {
-  slopingCohesiveForce,
-  slopingCohesiveMoment,
-  slopingCohesivePressure,
-} from "../formulas/mazindrani-ganjali.ts";
+import { slopingCohesivePressure, slopingCohesiveThrust } from "../formulas/mazindrani-ganjali.ts";
 import { type Columns, type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import { buoyantUnitWeight, clamp, type LayerSlots } from "./layers.ts";
@@ -84,6 +80,7 @@ function thrustStage(b: KernelBuilder, part: PlanePart): void {
   const name = `thrust, layer ${part.place}${part.wet ? ", wet" : ""}`;
   if (law.kind === "curved") {
     const { cohesion, frictionAngle, slope } = law;
+    const both = new Float64Array(2);
     b.stage({
       name,
       reads: [top, bottom, stressTop, stressBottom, cohesion, frictionAngle, slope],
@@ -102,8 +99,9 @@ function thrustStage(b: KernelBuilder, part: PlanePart): void {
         ];
         for (let i = 0; i < count; i++) {
           const length = t[i] - e[i];
-          f[i] = slopingCohesiveForce(s0[i], s1[i], length, co[i], fr[i], sl[i]);
-          m[i] = slopingCohesiveMoment(s0[i], s1[i], length, co[i], fr[i], sl[i]) + f[i] * e[i];
+          slopingCohesiveThrust(both, s0[i], s1[i], length, co[i], fr[i], sl[i]);
+          f[i] = both[0];
+          m[i] = both[1] + both[0] * e[i];
         }
       },
     });

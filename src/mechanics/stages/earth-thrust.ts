@@ -2,7 +2,7 @@ import { columnwise } from "../columnwise.ts";
 import { activeCoefficientCoulomb } from "../formulas/coulomb.ts";
 import { positiveCentre, positiveForce, positiveLength } from "../formulas/linear-pressure.ts";
 import { slopeUnstable } from "../formulas/mazindrani-ganjali.ts";
-import { activeCoefficientMononobeOkabe, seismicAngle } from "../formulas/mononobe-okabe.ts";
+import { activeCoefficientMononobeOkabe, seismicAngle, submergedMassRatio } from "../formulas/mononobe-okabe.ts";
 import { mark, type Slot, waterUnitWeight } from "../kernel.ts";
 import type { KernelBuilder } from "../kernel-builder.ts";
 import type { PlanePart } from "./earth-pressure.ts";
@@ -220,8 +220,7 @@ function surchargeShare(
   return { thrust, moment };
 }
 
-const massRatio = (saturated: number): number =>
-  saturated > waterUnitWeight ? saturated / (saturated - waterUnitWeight) : 1e6;
+const massRatio = (saturated: number): number => submergedMassRatio(saturated, waterUnitWeight);
 const dryRatio = (): number => 1;
 const quakeRise = (kv: number, quake: number, rest: number): number => (1 - kv) * quake - rest;
 const incrementOf = (rise: number, stressTop: number, stressBottom: number, top: number, bottom: number): number =>
