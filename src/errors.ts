@@ -11,7 +11,9 @@ export interface Problem {
 
 /** `file:line:column path: message` and, on a line of its own, the hint. Parts that are missing are left out. */
 export function formatProblem(problem: Problem, file = ""): string {
-  const place = [file, ...(problem.at ? [problem.at.line, problem.at.column] : [])].filter((part) => part !== "").join(":");
+  const place = [file, ...(problem.at ? [problem.at.line, problem.at.column] : [])]
+    .filter((part) => part !== "")
+    .join(":");
   const lead = [place, problem.path === "" ? "" : `${problem.path}:`].filter((part) => part !== "").join(" ");
   const hint = problem.hint === undefined ? "" : `\n  hint: ${problem.hint}`;
   return `${lead === "" ? "" : `${lead} `}${problem.message}${hint}`;

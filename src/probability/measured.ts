@@ -1,4 +1,4 @@
-import { compensatedSum } from "../numeric/compensated-sum.ts";
+import { mean, sampleVariance } from "simple-statistics";
 import { studentDensity, studentUpper, studentUpperQuantile } from "../numeric/student-t.ts";
 import { completeMarginal, requireFinite, requirePositive } from "./complete-marginal.ts";
 import { lognormalOfLogs } from "./lognormal.ts";
@@ -31,8 +31,8 @@ export function measured(parameters: {
     throw new RangeError(`measured: the variance reduction is ${varianceReduction}, must lie between 0 and 1`);
   }
   const sample = as === "lognormal" ? values.map(Math.log) : values;
-  const centre = compensatedSum(sample) / n;
-  const variance = compensatedSum(sample.map((x) => (x - centre) ** 2)) / (n - 1);
+  const centre = mean(sample);
+  const variance = sampleVariance(sample);
   if (!(variance > 0)) throw new RangeError(`measured: all values are ${values[0]}, which leaves no spread`);
   const scale = Math.sqrt(variance * (varianceReduction + 1 / n));
   const degrees = n - 1;
@@ -40,9 +40,9 @@ export function measured(parameters: {
 
   // moments and evaluation
   if (as === "lognormal") {
-    const mean = Math.exp(centre + 0.5 * sd * sd);
-    const spread = mean * Math.sqrt(Math.expm1(sd * sd));
-    return lognormalOfLogs({ kind: "measured", mean, sd: spread, shift: 0, logMean: centre, logSd: sd });
+    const expected = Math.exp(centre + 0.5 * sd * sd);
+    const spread = expected * Math.sqrt(Math.expm1(sd * sd));
+    return lognormalOfLogs({ kind: "measured", mean: expected, sd: spread, shift: 0, logMean: centre, logSd: sd });
   }
   return completeMarginal({
     kind: "measured",

@@ -1,3 +1,4 @@
+import { mean as sampleMean, sampleVariance } from "simple-statistics";
 /** Mean and standard deviation of every kind of distribution, in closed form. */
 import { gamma } from "../numeric/gamma.ts";
 import { normalCdf, normalPdf } from "../numeric/normal.ts";
@@ -93,9 +94,8 @@ function mixtureMoments(parts: readonly { readonly share: number; readonly of: D
 function predictiveMoments(values: readonly number[], as: "normal" | "lognormal", varianceReduction: number): Moments {
   const n = values.length;
   const numbers = as === "lognormal" ? values.map(Math.log) : values;
-  const mean = numbers.reduce((sum, value) => sum + value, 0) / n;
-  const squares = numbers.reduce((sum, value) => sum + (value - mean) ** 2, 0) / (n - 1);
-  const variance = (squares * (varianceReduction + 1 / n) * (n - 1)) / (n - 3);
+  const mean = sampleMean(numbers);
+  const variance = (sampleVariance(numbers) * (varianceReduction + 1 / n) * (n - 1)) / (n - 3);
   if (as === "normal") return { mean, sd: Math.sqrt(variance) };
   const logMean = Math.exp(mean + variance / 2);
   return { mean: logMean, sd: logMean * Math.sqrt(Math.expm1(variance)) };
