@@ -36,11 +36,12 @@ export class KernelBuilder {
   readonly #inputSlots = new Map<string, Slot>();
   readonly #varyingInputs = new Set<Slot>();
   readonly #constants = new Map<Slot, number>();
+  /** One entry a slot: what is constant is computed here while the kernel is built. */
+  readonly #columns: Float64Array[] = [];
   readonly #coefficients: Coefficient[] = [];
   readonly #stages: Stage[] = [];
   readonly #shared = new Map<string, Slot>();
   readonly #angles = new Set<Slot>();
-  #constantMarks = 0;
   readonly steps: Step[] = [];
   readonly forces: ForceSlots[] = [];
   readonly pressure: PressurePart[] = [];
@@ -54,6 +55,7 @@ export class KernelBuilder {
   }
 
   slot(name: string): Slot {
+    this.#columns.push(new Float64Array(1));
     return this.#names.push(name) - 1;
   }
 
@@ -63,7 +65,7 @@ export class KernelBuilder {
     const known = this.#shared.get(key);
     if (known !== undefined) return known;
     const slot = this.slot(name);
-    this.#constants.set(slot, value);
+    this.#fix(slot, value);
     this.#shared.set(key, slot);
     return slot;
   }
@@ -78,7 +80,7 @@ export class KernelBuilder {
     const { lowest, highest, fixed } = field;
     this.#inputs.push({ path, slot, lowest, highest, scale, ...(fixed === undefined ? {} : { fixed }) });
     if (fixed === undefined) this.#varyingInputs.add(slot);
-    else this.#constants.set(slot, fixed * scale);
+    else this.#fix(slot, fixed * scale);
     if (field.angle) this.#angles.add(slot);
     this.#inputSlots.set(path, slot);
     return slot;
@@ -114,11 +116,8 @@ export class KernelBuilder {
       this.#stages.push(stage);
       return;
     }
-    const columns = this.#names.map((_, slot) => Float64Array.of(this.#constants.get(slot) ?? 0));
-    columns[this.marks][0] = this.#constantMarks;
-    stage.run(columns, 1);
-    for (const slot of stage.writes) if (slot !== this.marks) this.#constants.set(slot, columns[slot][0]);
-    this.#constantMarks = columns[this.marks][0];
+    stage.run(this.#columns, 1);
+    for (const slot of stage.writes) if (slot !== this.marks) this.#constants.set(slot, this.#columns[slot][0]);
   }
 
   /**
@@ -163,7 +162,7 @@ export class KernelBuilder {
       if (value === undefined) varying.push({ slot, sign });
       else constant += sign * value;
     }
-    if (varying.length === 0) this.#constants.set(into, constant);
+    if (varying.length === 0) this.#fix(into, constant);
     else this.stage(sumStage(name, varying, constant, into));
     return into;
   }
@@ -191,7 +190,7 @@ export class KernelBuilder {
       stages: this.#stages,
       limitStates: this.limitStates,
       marks: this.marks,
-      constantMarks: this.#constantMarks,
+      constantMarks: this.#columns[this.marks][0],
       steps: this.steps,
       angles: [...this.#angles],
       forces: this.forces,
@@ -199,6 +198,11 @@ export class KernelBuilder {
       places: this.places,
       loadPressure: this.loadPressure,
     };
+  }
+
+  #fix(slot: Slot, value: number): void {
+    this.#constants.set(slot, value);
+    this.#columns[slot][0] = value;
   }
 
   #field(path: string): InputField {
