@@ -3,7 +3,7 @@ import { bivariateNormal } from "../../../src/numeric/bivariate-normal.ts";
 import { anyNormalAbove, multivariateNormal } from "../../../src/numeric/multivariate-normal.ts";
 import { readCases } from "../cases.ts";
 
-const effort = { relativeError: 1e-3, evaluations: 200_000 };
+const effort = { relativeError: 2e-3, evaluations: 60_000 };
 
 test("every row of equally correlated modes: any fails, all fail", () => {
   const rows = readCases(new URL("cases.csv", import.meta.url));
@@ -22,7 +22,7 @@ test("every row of equally correlated modes: any fails, all fail", () => {
       expect(Math.abs(found.probability - value), JSON.stringify(row)).toBeLessThan(
         5 * found.standardError + 1e-8 * value,
       );
-      expect(found.standardError / value, JSON.stringify(row)).toBeLessThan(5e-3);
+      expect(found.standardError / value, JSON.stringify(row)).toBeLessThan(2e-2);
     }
   }
 });
