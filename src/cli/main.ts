@@ -1,15 +1,13 @@
-import { Command, CommanderError } from "commander";
-import { StudyError } from "../errors.ts";
-import { placeProblems } from "../study/place-problems.ts";
+import { Command } from "commander";
 import { version } from "../version.ts";
 import { addAssess } from "./commands/assess.ts";
 import { addCheck } from "./commands/check.ts";
+import { addCompletion } from "./commands/completion.ts";
 import { addNew } from "./commands/new.ts";
 import { addReport } from "./commands/report.ts";
 import { addSchema } from "./commands/schema.ts";
-import { exitCode, type Io, UsageError } from "./io.ts";
-import { problemText } from "./problems.ts";
-import { StudyTextError } from "./study-input.ts";
+import { showFailure } from "./failure.ts";
+import { exitCode, type Io } from "./io.ts";
 
 /** Runs one command line and returns its exit code. Nothing here ends the process. */
 export async function run(args: readonly string[], io: Io): Promise<number> {
@@ -35,34 +33,15 @@ export async function run(args: readonly string[], io: Io): Promise<number> {
   addAssess(program, io, end);
   addReport(program, io, end);
   addSchema(program, io);
+  addCompletion(program, io);
   addNew(program, io);
   for (const command of program.commands) command.exitOverride().copyInheritedSettings(program);
   try {
     await program.parseAsync([...args], { from: "user" });
     return code;
   } catch (error) {
-    return failure(error, io);
+    return showFailure(error, io);
   }
-}
-
-function failure(error: unknown, io: Io): number {
-  if (error instanceof CommanderError) return error.exitCode === 0 ? exitCode.done : exitCode.usage;
-  if (error instanceof UsageError) {
-    io.err(`toehold: ${error.message}\n`);
-    return exitCode.usage;
-  }
-  const cause = error instanceof StudyTextError ? error.cause : error;
-  if (cause instanceof StudyError) {
-    const placed = error instanceof StudyTextError ? placeProblems(cause, error.text, error.file) : cause;
-    io.err(problemText(placed, error instanceof StudyTextError ? error.text : ""));
-    return exitCode.studyWrong;
-  }
-  if (cause instanceof UsageError) return failure(cause, io);
-  const detail = cause instanceof Error ? (cause.stack ?? cause.message) : String(cause);
-  io.err(
-    `toehold ${version}: an internal error; nothing was written. Please report it with the study and these lines:\n${detail}\n`,
-  );
-  return exitCode.internal;
 }
 
 /** The process as a command line: its streams, Ctrl-C, exit code. */

@@ -210,6 +210,77 @@ describe("toehold report, schema and new", () => {
   );
 });
 
+describe("two studies, a watched file, completion", () => {
+  test("--compare sets two studies side by side, in text and as an array in JSON", async () => {
+    const other = join(root, "studies/creek-side-wall/study.yaml");
+    const checked = await runWith(["check", yard, "--compare", other]);
+    expect(checked.code).toBe(0);
+    expect(checked.out).toContain("Factors of safety, side by side");
+    expect(checked.out).toMatch(/Uncertain values that differ[\s\S]*water\.behind\.level/);
+    const assessed = await runWith(["assess", yard, "--compare", yard, ...few]);
+    expect(assessed.out).toContain("Probability (index), side by side");
+    expect(assessed.out).toContain("Their uncertain values have the same means.");
+    const both = JSON.parse((await runWith(["check", yard, "--compare", other, "--json"])).out);
+    expect(both.map((result: { study: string }) => result.study)).toEqual([
+      "Yard wall, bay 3 (invented)",
+      "Creek-side wall (invented)",
+    ]);
+  });
+
+  test("--watch runs again when the file is saved, shows what changed and a mistake, and ends with the user", async () => {
+    const file = join(folder, "watched.yaml");
+    const text = await readFile(yard, "utf8");
+    await writeFile(file, text);
+    const stop = new AbortController();
+    let [out, err] = ["", ""];
+    const until = async (found: () => boolean): Promise<void> => {
+      for (let tries = 0; tries < 200 && !found(); tries++) await new Promise((resolve) => setTimeout(resolve, 50));
+      expect(found()).toBe(true);
+    };
+    const watching = runWith(["check", file, "--watch"], {
+      signal: stop.signal,
+      out: (part) => {
+        out += part;
+      },
+      err: (part) => {
+        err += part;
+      },
+    });
+    await until(() => err.includes("Watching"));
+    await writeFile(file, text.replace("height: 5.0", "height: 5.2"));
+    await until(() => out.includes("side by side"));
+    expect(out).toMatch(/before +now/);
+    await writeFile(file, text.replace("height: 5.0", "height: -1"));
+    await until(() => err.includes("wall.stem.height"));
+    stop.abort();
+    expect((await watching).code).toBe(0);
+  });
+
+  test.each(["bash", "zsh", "fish"])("completion for %s names every command and its options", async (shell) => {
+    const ran = await runWith(["completion", shell]);
+    expect(ran.code).toBe(0);
+    for (const word of [
+      "check",
+      "assess",
+      "report",
+      "schema",
+      "new",
+      shell === "fish" ? "-l precision" : "--precision",
+    ])
+      expect(ran.out).toContain(word);
+    expect((await runWith(["completion", "tcsh"])).code).toBe(2);
+  });
+
+  test("the bash completion is a script that bash accepts and that completes", async () => {
+    const { out } = await runWith(["completion", "bash"]);
+    const { stdout } = await promisify(execFile)("bash", [
+      "-c",
+      `${out}\nCOMP_WORDS=(toehold assess --pre); COMP_CWORD=2; _toehold; echo "\${COMPREPLY[@]}"`,
+    ]);
+    expect(stdout.trim()).toBe("--precision");
+  });
+});
+
 describe("what goes wrong", () => {
   test("a wrong study ends with 1, the line and a caret, and writes nothing", async () => {
     const file = join(folder, "wrong.yaml");
