@@ -100,8 +100,7 @@ function cutBand(profile: Profile, j: number, circle: SlipCircle, from: number, 
   cuts[count++] = from;
   for (let i = 0; i < zone.count - 1; i++) count = cutAtLine(circle, zone.bottom[i], 0, from, to, count);
   const level = profile.water[2 * j];
-  if (level !== Number.NEGATIVE_INFINITY)
-    count = cutAtLine(circle, level, profile.water[2 * j + 1], from, to, count);
+  if (level !== Number.NEGATIVE_INFINITY) count = cutAtLine(circle, level, profile.water[2 * j + 1], from, to, count);
   // few and nearly in order: by insertion
   for (let i = 2; i < count; i++) {
     const x = cuts[i];
@@ -114,14 +113,7 @@ function cutBand(profile: Profile, j: number, circle: SlipCircle, from: number, 
 }
 
 /** Adds where the lower half of the circle meets the line z = level + slope·x inside (from, to). */
-function cutAtLine(
-  circle: SlipCircle,
-  level: number,
-  slope: number,
-  from: number,
-  to: number,
-  count: number,
-): number {
+function cutAtLine(circle: SlipCircle, level: number, slope: number, from: number, to: number, count: number): number {
   // with t = x − xc: zc − √(R² − t²) = h + slope·t, h the line's level at the centre, below it
   const drop = circle.z - (level + slope * circle.x);
   const square = 1 + slope * slope;
@@ -136,14 +128,7 @@ function cutAtLine(
   return count;
 }
 
-function addStretch(
-  profile: Profile,
-  j: number,
-  circle: SlipCircle,
-  arc: Arc,
-  sin1: number,
-  sin2: number,
-): void {
+function addStretch(profile: Profile, j: number, circle: SlipCircle, arc: Arc, sin1: number, sin2: number): void {
   if (!(sin2 > sin1)) return;
   const { x: xc, z: zc, radius } = circle;
   const cos1 = Math.sqrt((1 - sin1) * (1 + sin1));
@@ -211,10 +196,10 @@ function addStretch(
   s[at + column.normal0] = normal0;
   s[at + column.normal1] = normal1;
   s[at + column.normal2] = normal2;
-  s[at + column.leastNormal] = Math.min(
-    normal0 + normal1 * sin1 + normal2 * cos1,
-    normal0 + normal1 * sin2 + normal2 * cos2,
-  );
+  // at the surface it is 0 but for rounding
+  const rounding = 1e-12 * (Math.abs(normal0) + Math.abs(normal2));
+  s[at + column.leastNormal] =
+    Math.min(normal0 + normal1 * sin1 + normal2 * cos1, normal0 + normal1 * sin2 + normal2 * cos2) + rounding;
   arc.count++;
   limitTilt(arc, sin1, cos1, tanFriction);
   limitTilt(arc, sin2, cos2, tanFriction);
@@ -223,8 +208,7 @@ function addStretch(
 /** Narrows the factors of safety to those with m_α ≥ 0.2 at an end; m_α is concave in α, so ends are enough. */
 function limitTilt(arc: Arc, sin: number, cos: number, tanFriction: number): void {
   const spare = cos - leastTilt;
-  if (sin < 0)
-    arc.least = Math.max(arc.least, spare > 0 ? (-tanFriction * sin) / spare : Number.POSITIVE_INFINITY);
+  if (sin < 0) arc.least = Math.max(arc.least, spare > 0 ? (-tanFriction * sin) / spare : Number.POSITIVE_INFINITY);
   else if (spare < 0) arc.greatest = Math.min(arc.greatest, (tanFriction * sin) / -spare);
 }
 

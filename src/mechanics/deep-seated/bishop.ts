@@ -1,4 +1,3 @@
-import { factorCap } from "../kernel.ts";
 import { type Arc, column, terms } from "./arc.ts";
 
 /**
@@ -26,7 +25,7 @@ export function resistingMoment(arc: Arc, factor: number): number {
     const tilt = arc.lines[at + 1] + (arc.lines[at] * tanFriction) / factor;
     if (tanFriction > 0) lines += (arc.lines[at + 2] * tanFriction) / tilt;
   }
-  return arc.frictionless + arc.radius * (arc.radius * sum + lines);
+  return Math.max(arc.frictionless + arc.radius * (arc.radius * sum + lines), 0);
 }
 
 /**
@@ -64,10 +63,7 @@ function inContact(
   const sine = -cos2D * fall + sin2D * (rise - 0.5 * secant);
   const cosine = cos2D * rise + sin2D * fall + sinD * sinD * secant;
   const constant = s[at + column.cohesion] + tanFriction * s[at + column.normal0];
-  return (
-    cosD *
-    (constant * one + tanFriction * (s[at + column.normal1] * sine + s[at + column.normal2] * cosine))
-  );
+  return cosD * (constant * one + tanFriction * (s[at + column.normal1] * sine + s[at + column.normal2] * cosine));
 }
 
 /** e^Λ = (1 + sin β)/cos β, whose logarithm is ∫ dβ/cos β. */
@@ -153,49 +149,4 @@ function signChange(f: (x: number) => number, low: number, high: number, atLow: 
     if (Math.abs(fx) < 1e-12 * (Math.abs(atLow) + Math.abs(fb))) return x;
   }
   return 0.5 * (a + b);
-}
-
-/** Not a factor of safety: the circle is left out, m_α being under 0.2 at the factor it would have. */
-export const leftOut: number = Number.POSITIVE_INFINITY;
-
-/**
- * Factor of safety of a circle: the F with F = M_R(F)/M_D. M_R(F)/F falls with F wherever m_α > 0, since
- * d ln M_R/d ln F is a mean of sin α tan φ/(F m_α) = 1 − cos α/m_α < 1; so there is one root at most, and whether it lies
- * among the factors with m_α ≥ 0.2 shows at their ends.
- *
- * @param start where to begin; any positive number gives the same to 1e-9
- * @returns 0 … the cap (also where nothing drives), or `leftOut`
- */
-export function circleFactor(arc: Arc, start: number): number {
-  const { driving } = arc;
-  if (!(driving > 0)) return factorCap;
-  if (arc.count === 0) return Math.min(resistingMoment(arc, 1) / driving, factorCap);
-  const low = Math.max(arc.least, 1e-6);
-  const high = Math.min(arc.greatest, factorCap);
-  if (low > high) return leftOut;
-  const excess = (factor: number): number => Math.log(resistingMoment(arc, factor) / driving / factor);
-  let [left, right] = [low, high];
-  let x = Math.min(Math.max(start, low), high);
-  let y = excess(x);
-  let [lastX, lastY] = [Number.NaN, Number.NaN];
-  for (let i = 0; i < 100; i++) {
-    if (y > 0) {
-      if (x >= high) return arc.greatest < factorCap ? leftOut : factorCap;
-      left = x;
-    } else if (y < 0) {
-      if (x <= low) return arc.least > 1e-6 ? leftOut : 0;
-      right = x;
-    } else return x;
-    // the secant on logarithms; at first, and where it leaves the bracket, F = M_R/M_D itself or the middle
-    const slope = (y - lastY) / Math.log(x / lastX);
-    const step = slope < 0 ? Math.exp(Math.min(Math.max(-y / slope, -20), 20)) : Math.exp(Math.min(Math.max(y, -20), 20));
-    let next = x * step;
-    if (next >= right) next = right === high ? high : Math.sqrt(left * right);
-    if (next <= left) next = left === low ? low : Math.sqrt(left * right);
-    if (Math.abs(next - x) <= 1e-10 * x && i > 0) return next;
-    [lastX, lastY] = [x, y];
-    x = next;
-    y = excess(x);
-  }
-  return x;
 }

@@ -1,4 +1,4 @@
-import type { CircleLimits } from "./profile.ts";
+import type { CircleLimits } from "./circle-limits.ts";
 
 /** A slip circle; the arc from exit to entry lies below its centre. m. */
 export interface SlipCircle {
@@ -51,9 +51,10 @@ const chord: Chord = { mx: 0, mz: 0, a: 0, cos: 1, sin: 0 };
 function setEnds(limits: CircleLimits, entryX: number, exitWay: number, circle: SlipCircle): void {
   circle.entryX = entryX;
   circle.entryZ = limits.heelTop + limits.surfaceTangent * (entryX - limits.heelX);
-  const face = Math.max(-limits.exitLevel, 0);
-  circle.exitX = Math.min(face - exitWay, 0);
-  circle.exitZ = exitWay < face ? -exitWay : limits.exitLevel;
+  const face = faceLength(limits);
+  const onFace = face > 0 && exitWay <= face + footWidth(limits);
+  circle.exitX = onFace ? 0 : face - exitWay;
+  circle.exitZ = onFace ? -Math.min(exitWay, face) : limits.exitLevel;
   const [dx, dz] = [circle.entryX - circle.exitX, circle.entryZ - circle.exitZ];
   const length = Math.sqrt(dx * dx + dz * dz);
   chord.mx = 0.5 * (circle.entryX + circle.exitX);
@@ -107,7 +108,7 @@ function room(limits: CircleLimits, entryX: number, exitWay: number, circle: Sli
   return greatestAllowed(limits) - leastAllowed(limits, circle.exitX);
 }
 
-/** Stretch of the way on which circles from this entry may leave. For one entry the allowed centres form a convex set, so it is one stretch. */
+/** A stretch of the way on which circles from one entry may leave. */
 export interface ExitStretch {
   from: number;
   to: number;
@@ -115,17 +116,42 @@ export interface ExitStretch {
 
 const scratch: SlipCircle = { x: 0, z: 0, radius: 0, entryX: 0, entryZ: 0, exitX: 0, exitZ: 0 };
 
-/** @returns false where no circle enters here */
-export function exitStretch(limits: CircleLimits, entryX: number, stretch: ExitStretch): boolean {
-  const { exitWay } = limits;
+/** Length of the face under the toe, where the ground in front is dug away below the underside. */
+function faceLength(limits: CircleLimits): number {
+  return Math.max(-limits.exitLevel, 0);
+}
+
+/** Exits closer than this to the foot of the face are at it, so that rounding does not take them past it. */
+const footWidth = (limits: CircleLimits): number => 1e-9 * limits.height;
+
+/**
+ * Where circles from this entry may leave on the ground in front, or through the face under the toe. For one entry the centres
+ * that are allowed form a convex set, so each is one stretch.
+ *
+ * @returns false where there is none
+ */
+export function exitStretch(
+  limits: CircleLimits,
+  entryX: number,
+  part: "face" | "ground",
+  stretch: ExitStretch,
+): boolean {
+  const face = faceLength(limits);
+  if (part === "ground")
+    return openStretch(limits, entryX, face > 0 ? face + 2 * footWidth(limits) : 0, limits.exitWay, stretch);
+  return face > 0 && openStretch(limits, entryX, 0, face, stretch);
+}
+
+function openStretch(limits: CircleLimits, entryX: number, low: number, high: number, stretch: ExitStretch): boolean {
   const steps = 24;
   const roomAt = (way: number): number => room(limits, entryX, way, scratch);
+  const at = (i: number): number => low + ((high - low) * Math.min(Math.max(i, 0), steps)) / steps;
   let first = -1;
   let last = -1;
   let best = 0;
   let bestRoom = Number.NEGATIVE_INFINITY;
   for (let i = 0; i <= steps; i++) {
-    const found = roomAt((exitWay * i) / steps);
+    const found = roomAt(at(i));
     if (found >= 0) {
       if (first < 0) first = i;
       last = i;
@@ -135,7 +161,6 @@ export function exitStretch(limits: CircleLimits, entryX: number, stretch: ExitS
       best = i;
     }
   }
-  const at = (i: number): number => (exitWay * Math.min(Math.max(i, 0), steps)) / steps;
   if (first < 0) {
     const way = widest(roomAt, at(best - 1), at(best + 1));
     if (roomAt(way) < 0) return false;
@@ -143,8 +168,8 @@ export function exitStretch(limits: CircleLimits, entryX: number, stretch: ExitS
     stretch.to = edge(roomAt, at(best + 1), way);
     return true;
   }
-  stretch.from = first === 0 ? 0 : edge(roomAt, at(first - 1), at(first));
-  stretch.to = last === steps ? exitWay : edge(roomAt, at(last + 1), at(last));
+  stretch.from = first === 0 ? low : edge(roomAt, at(first - 1), at(first));
+  stretch.to = last === steps ? high : edge(roomAt, at(last + 1), at(last));
   return true;
 }
 
@@ -152,7 +177,7 @@ export function exitStretch(limits: CircleLimits, entryX: number, stretch: ExitS
 function edge(roomAt: (way: number) => number, without: number, withRoom: number): number {
   let [bad, good] = [without, withRoom];
   if (roomAt(bad) >= 0) return bad;
-  for (let i = 0; i < 40; i++) {
+  for (let i = 0; i < 30; i++) {
     const middle = 0.5 * (bad + good);
     if (roomAt(middle) >= 0) good = middle;
     else bad = middle;
@@ -174,6 +199,15 @@ function widest(roomAt: (way: number) => number, from: number, to: number): numb
 
 const stretch: ExitStretch = { from: 0, to: 0 };
 
+/** The nearest exit to a way that this entry has a circle for, on the ground or on the face as the way is, else on the other; NaN where there is none. */
+function nearestExit(limits: CircleLimits, entryX: number, way: number): number {
+  const onFace = way <= faceLength(limits);
+  const open =
+    exitStretch(limits, entryX, onFace ? "face" : "ground", stretch) ||
+    exitStretch(limits, entryX, onFace ? "ground" : "face", stretch);
+  return open ? Math.min(Math.max(way, stretch.from), stretch.to) : Number.NaN;
+}
+
 /**
  * The circle at a place. An exit from which this entry has no circle gives way to the nearest that has one.
  *
@@ -185,8 +219,8 @@ export function circleAt(limits: CircleLimits, place: ArrayLike<number>, circle:
   let way = Math.min(Math.max(place[1] * height, 0), exitWay);
   if (!(entryX > heelX)) return false;
   if (room(limits, entryX, way, circle) < 0) {
-    if (!exitStretch(limits, entryX, stretch)) return false;
-    way = Math.min(Math.max(way, stretch.from), stretch.to);
+    way = nearestExit(limits, entryX, way);
+    if (Number.isNaN(way)) return false;
     setEnds(limits, entryX, way, circle);
   }
   const least = leastAllowed(limits, circle.exitX);

@@ -121,8 +121,7 @@ function loadAt(ground: DeepSeatedGround, x: number): number {
   if (behindCrest < 0) return 0;
   const { surcharge, strips } = ground.loads;
   return strips.reduce(
-    (sum, { pressure, from, width }) =>
-      sum + (behindCrest > from && behindCrest < from + width ? pressure : 0),
+    (sum, { pressure, from, width }) => sum + (behindCrest > from && behindCrest < from + width ? pressure : 0),
     surcharge,
   );
 }

@@ -1,12 +1,5 @@
 import { columnAt, frontRun, type WaterLevels, waterLevels, waterLineAt } from "./column.ts";
-import {
-  baseWidth,
-  crestOfBack,
-  type DeepSeatedGround,
-  loweredFront,
-  virtualTop,
-  wallHeight,
-} from "./ground.ts";
+import { baseWidth, crestOfBack, type DeepSeatedGround, wallHeight } from "./ground.ts";
 import { momentTo, weightTo, type Zone, zonesOf } from "./zone.ts";
 
 /**
@@ -32,6 +25,8 @@ export interface Profile {
   readonly lift: Float64Array;
   readonly liftMoment: Float64Array;
   readonly lines: readonly { readonly x: number; readonly force: number }[];
+  /** Where strips begin and end. */
+  readonly loadEdges: readonly number[];
   /** Level of the water in front, whose pressure acts on the end face; −∞ where dry. */
   readonly frontWater: number;
   readonly kh: number;
@@ -45,6 +40,7 @@ export interface ProfileSource {
   columnAt(x: number): { readonly mass: number; readonly moment: number; readonly load: number };
   waterLineAt(x: number): number;
   readonly lines: Profile["lines"];
+  readonly loadEdges: readonly number[];
   readonly frontWater: number;
   readonly kh: number;
   readonly kv: number;
@@ -81,7 +77,7 @@ export function profileOf(source: ProfileSource): Profile {
     straight(lift, j, xs, wetter(weightTo));
     parabola(liftMoment, j, xs, wetter(momentTo));
   }
-  const { lines, frontWater, kh, kv } = source;
+  const { lines, loadEdges, frontWater, kh, kv } = source;
   return {
     bands,
     edges: Float64Array.from(edges),
@@ -93,6 +89,7 @@ export function profileOf(source: ProfileSource): Profile {
     lift,
     liftMoment,
     lines,
+    loadEdges,
     frontWater,
     kh,
     kv,
@@ -134,10 +131,16 @@ export function wallProfile(ground: DeepSeatedGround): Profile {
     columnAt: (x) => columnAt(ground, zones, levels, x),
     waterLineAt: (x) => waterLineAt(ground, levels, x),
     lines: ground.loads.lines.map(({ force, at }) => ({ x: crest + at, force })),
+    loadEdges: stripEdges(ground),
     frontWater: levels.front,
     kh: ground.earthquake.kh,
     kv: ground.earthquake.kv,
   });
+}
+
+function stripEdges(ground: DeepSeatedGround): readonly number[] {
+  const crest = crestOfBack(ground.wall);
+  return ground.loads.strips.flatMap(({ from, width }) => [crest + from, crest + from + width]);
 }
 
 /** Every x at which something changes, between the ends of the search and a little beyond them. */
@@ -151,7 +154,10 @@ function wallEdges(ground: DeepSeatedGround, levels: WaterLevels): readonly numb
   const onBack = (z: number): number => foot - ((z - wall.thickness) * wall.backRun) / wall.stemHeight;
   const onFace = (z: number): number => wall.toe + ((z - wall.thickness) * (face - wall.toe)) / wall.stemHeight;
   const { key } = wall;
-  const [lineFront, lineBehind] = [waterLineAt(ground, levels, 1e-12 * width), waterLineAt(ground, levels, width * (1 - 1e-12))];
+  const [lineFront, lineBehind] = [
+    waterLineAt(ground, levels, 1e-12 * width),
+    waterLineAt(ground, levels, width * (1 - 1e-12)),
+  ];
   const onLine = (z: number): number => (width * (z - lineFront)) / (lineBehind - lineFront);
   const inside = [
     ...[0, wall.toe, face, crest, foot, width],
@@ -159,58 +165,8 @@ function wallEdges(ground: DeepSeatedGround, levels: WaterLevels): readonly numb
     ...levelsBehind.flatMap((z) => [onSlope(z), onBack(z)]),
     ...[front.level, levels.front].map(onFace),
     ...[0, ...below.map(({ bottom }) => bottom ?? Number.NaN)].map(onLine),
-    ...loads.strips.flatMap((strip) => [crest + strip.from, crest + strip.from + strip.width]),
+    ...stripEdges(ground),
     ...loads.lines.map(({ at }) => crest + at),
   ];
   return [from, ...inside.filter((x) => x > from && x < to), to];
-}
-
-/** Points and limits that a circle has to respect. */
-export interface CircleLimits {
-  readonly height: number;
-  /** Corners of base and key, x and z: a circle runs below them or touches them. */
-  readonly cornersX: Float64Array;
-  readonly cornersZ: Float64Array;
-  readonly heelX: number;
-  readonly heelTop: number;
-  readonly surfaceTangent: number;
-  readonly farthestEntry: number;
-  /** Level at which circles leave; below 0 they may leave through the face under the toe too. */
-  readonly exitLevel: number;
-  /** Length of the way on which circles leave: down the face under the toe, if there is one, then along the ground. */
-  readonly exitWay: number;
-  /** Levels that circles may be tangent to, from the top down: boundaries below the underside, last the firm level. */
-  readonly levels: Float64Array;
-}
-
-export function circleLimits(ground: DeepSeatedGround): CircleLimits {
-  const { wall, behind, below } = ground;
-  const { key } = wall;
-  const [height, width] = [wallHeight(wall), baseWidth(wall)];
-  const firm = ground.firmLevel ?? -height;
-  const corners = [
-    [0, 0],
-    [width, 0],
-    ...(key === undefined
-      ? []
-      : [
-          [key.fromToe, -key.depth],
-          [key.fromToe + key.width, -key.depth],
-        ]),
-  ];
-  const exitLevel = loweredFront(ground);
-  const boundaries = [...below, ...behind.layers].flatMap(({ bottom }) => (bottom === undefined ? [] : [bottom]));
-  const levels = boundaries.map((z) => Math.min(Math.max(z, firm), 0)).sort((a, b) => b - a);
-  return {
-    height,
-    cornersX: Float64Array.from(corners, ([x]) => x),
-    cornersZ: Float64Array.from(corners, ([, z]) => z),
-    heelX: width,
-    heelTop: virtualTop(ground),
-    surfaceTangent: Math.tan(behind.slope),
-    farthestEntry: width + 4 * height,
-    exitLevel,
-    exitWay: Math.max(-exitLevel, 0) + 3 * height,
-    levels: Float64Array.from([...levels, firm]),
-  };
 }
