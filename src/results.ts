@@ -205,6 +205,14 @@ export interface FirstOrderResult {
   readonly probability: number | null;
   readonly designPoint: Readonly<Record<string, number>>;
   readonly importance: Readonly<Record<string, number>>;
+  /** Change of the index per unit of each mean and standard deviation; null where there is none. */
+  readonly derivatives?: Readonly<Record<string, { readonly perMean: number | null; readonly perSd: number | null }>>;
+  /** Further design points, farther out. */
+  readonly others?: readonly {
+    readonly reliabilityIndex: number;
+    readonly status: string;
+    readonly designPoint: Readonly<Record<string, number>>;
+  }[];
   readonly evaluations: number;
 }
 
@@ -313,4 +321,6 @@ export interface ReportInput {
   readonly study: Study;
   readonly check: CheckResult;
   readonly assess: AssessResult;
+  /** The wall at the values of `failurePoint(assess)`, for drawing; left out, the page gives the values alone. */
+  readonly atFailure?: CheckResult;
 }

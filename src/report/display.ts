@@ -23,6 +23,8 @@ export interface Display {
   /** Number and unit. */
   quantity(value: number, houseUnit: string): string;
   factor(houseUnit: string): number;
+  /** A length or level as one writes it in a drawing: two decimals, one from 100 up; without its unit. */
+  length(metres: number): string;
 }
 
 export function displayIn(units: Units): Display {
@@ -39,6 +41,10 @@ export function displayIn(units: Units): Display {
     number: (value, houseUnit) => threeFigures(value * of(houseUnit).factor),
     unit: (houseUnit) => of(houseUnit).unit,
     factor: (houseUnit) => of(houseUnit).factor,
+    length: (metres) => {
+      const value = metres * of("m").factor;
+      return (Math.abs(value) < 0.005 ? 0 : value).toFixed(Math.abs(value) < 100 ? 2 : 1).replace("-", "−");
+    },
     quantity: (value, houseUnit) => {
       const { unit, factor } = of(houseUnit);
       const number = threeFigures(value * factor);
@@ -55,5 +61,8 @@ export const limitStateWords: Readonly<Record<string, string>> = {
   eccentricity: "too great an eccentricity",
   deep_seated: "deep-seated failure",
 };
+
+/** The same at the start of a line. */
+export const limitStateName = (name: string): string => capitalised(limitStateWords[name] ?? name);
 
 export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -13,8 +13,9 @@ export function significant(value: number, figures: number): string {
   if (!Number.isFinite(value)) return "–";
   if (value === 0) return "0";
   const size = Math.floor(Math.log10(Math.abs(Number(value.toPrecision(figures)))));
-  const text = size < -3 || size > 5 ? scientific(value, figures) : value.toFixed(Math.max(0, figures - 1 - size));
-  return text.replace("-", minus);
+  if (size < -3 || size > 5) return scientific(value, figures).replace("-", minus);
+  if (size >= figures) return `${value < 0 ? minus : ""}${grouped(Math.abs(Number(value.toPrecision(figures))))}`;
+  return value.toFixed(Math.max(0, figures - 1 - size)).replace("-", minus);
 }
 
 /** 4.2 × 10⁻³, with the given number of figures. */
@@ -23,22 +24,38 @@ export function scientific(value: number, figures = 2): string {
   return `${digits.replace("-", minus)}${thin}×${thin}10${superscript(Number(power))}`;
 }
 
-function superscript(power: number): string {
+/** −3 as it is written above a 10. */
+export function superscript(power: number): string {
   const digits = "⁰¹²³⁴⁵⁶⁷⁸⁹";
   return [...String(power)].map((digit) => (digit === "-" ? "⁻" : digits[Number(digit)])).join("");
 }
 
 /** No probability below this is told apart from zero. */
 export const leastProbability = 1e-12;
+/** From here on a probability reads as per cent, and the whole of a range with it. */
+const likely = 0.0995;
 
-/** "1 in 240": rounded to two figures, so that no precision is pretended. */
+/** "1 in 240": two or three figures, so that no precision is pretended; per cent where it is likely. */
 export function oneIn(probability: number): string {
   if (probability <= 0) return "none seen";
-  if (probability < leastProbability) return "below 1 in 10¹²";
-  if (probability >= 0.995) return "nearly certain";
-  if (probability > 0.095) return `${Math.round(probability * 100)}${thin}%`;
+  if (probability < leastProbability) return `below 1 in 10¹²`;
+  if (probability >= likely) return percentText(probability);
   const count = Number((1 / probability).toPrecision(probability > 0.01 ? 2 : 3));
-  return `1 in ${grouped(count)}`;
+  return count < 1e8 ? `1 in ${grouped(count)}` : `1 in ${scientific(count, 2)}`;
+}
+
+function percentText(probability: number): string {
+  const percent = 100 * probability;
+  if (percent === 100) return `100${thin}%`;
+  if (percent >= 99.95) return `above 99.9${thin}%`;
+  return `${percent < 1 || percent > 99 ? percent.toFixed(1) : Math.round(percent)}${thin}%`;
+}
+
+/** "between 1 in 225 and 1 in 255", the likelier end first; in per cent, the smaller first, where one end is likely. */
+export function betweenText([low, high]: readonly [number, number]): string {
+  if (high >= likely) return `between ${low <= 0 ? `0${thin}%` : percentText(low)} and ${percentText(high)}`;
+  if (low < leastProbability) return `at most ${oneIn(high)}`;
+  return `between ${oneIn(high)} and ${oneIn(low)}`;
 }
 
 /** 12 400: digits in groups of three. */
@@ -52,9 +69,14 @@ export function grouped(count: number): string {
 export function probabilityText(probability: number): string {
   if (probability <= 0) return "0";
   if (probability < leastProbability) return `below 10⁻¹²`;
-  if (probability >= 0.0995) return significant(probability, 2);
+  if (probability >= likely)
+    return probability === 1 ? "1" : probability > 0.995 ? "above 0.99" : significant(probability, 2);
   return scientific(probability, 2);
 }
+
+/** "4.4 × 10⁻³ to 5.2 × 10⁻³". */
+export const intervalText = ([low, high]: readonly [number, number]): string =>
+  `${probabilityText(low)} to ${probabilityText(high)}`;
 
 /** An index of reliability, two decimals; none above 7 is a finding. */
 export function indexText(index: number | null): string {
@@ -70,16 +92,9 @@ export function shareText(share: number): string {
   return `${significant(percent, Math.abs(percent) >= 99.5 ? 3 : 2)}${thin}%`;
 }
 
-/** One sentence for an estimate: "about 1 in 240; between 1 in 225 and 1 in 255". Zero failures never read as safe. */
-export function estimateSentence(estimate: {
-  readonly probability: number;
-  readonly interval: readonly [number, number];
-  readonly failures: number;
-  readonly samples: number;
-}): string {
-  const { probability, interval, failures, samples } = estimate;
-  if (failures === 0)
-    return `no failure in ${grouped(samples)} samples, which shows only that it is rarer than ${oneIn(interval[1])}`;
-  if (failures === samples) return `failure in every one of ${grouped(samples)} samples`;
-  return `about ${oneIn(probability)}; between ${oneIn(interval[1])} and ${oneIn(interval[0])}`;
+/** A shift in standard deviations with its sign: +1.7, −0.2; finer than a tenth it is noise. */
+export function shiftText(value: number): string {
+  const text = value.toFixed(1);
+  if (Number(text) === 0) return "0";
+  return value > 0 ? `+${text}` : text.replace("-", minus);
 }

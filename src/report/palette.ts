@@ -1,21 +1,30 @@
 /**
- * Colours by role. Charts are drawn in the light ones; in the page each becomes a variable that dark mode redefines. Text and
- * marks keep a contrast of 4.5 to 1 or more on their paper; the pairs that must be told apart (likely and failing, earth and
- * water) differ in lightness as well as in hue, for colour blindness.
+ * Colours by role. Drawings and charts are made in the light ones; in the page each becomes a variable that dark mode redefines.
+ * Text and marks keep a contrast of 4.5 to 1 or more on their paper (a test computes it); the pairs that must be told apart
+ * (believed and failing, earth and water) differ in lightness as well as in hue, for colour blindness.
  */
 export const palette = {
   ink: "#1c2a30",
-  muted: "#53646c",
-  grid: "#dbe1e0",
+  muted: "#52636b",
+  grid: "#dce2e0",
   paper: "#fffefb",
+  wash: "#f1f3ee",
   main: "#0e6670",
-  soft: "#9cc4c5",
-  fail: "#b4421a",
-  failSoft: "#efb79e",
-  water: "#2a72ad",
-  waterSoft: "#c4dcee",
-  wall: "#6f7478",
+  soft: "#93c1c3",
+  fail: "#b0401a",
+  failSoft: "#f0bda6",
+  water: "#2567a3",
+  waterSoft: "#c2dbef",
+  wall: "#aab1b2",
   target: "#6a3d8f",
+  soil0: "#ead8b2",
+  soil1: "#d0b386",
+  soil2: "#cbc6a6",
+  soil3: "#e2c4a2",
+  soil4: "#bda57b",
+  soil5: "#dcd4c1",
+  soil6: "#cca98c",
+  soil7: "#efe5cd",
 } as const;
 
 export type Role = keyof typeof palette;
@@ -24,37 +33,48 @@ export type Role = keyof typeof palette;
 export const nightPalette: Readonly<Record<Role, string>> = {
   ink: "#e9eeec",
   muted: "#a9b8b8",
-  grid: "#38464a",
-  paper: "#172024",
-  main: "#5fc3c9",
-  soft: "#2d6367",
+  grid: "#36454a",
+  paper: "#161f23",
+  wash: "#1e2a2f",
+  main: "#62c5cb",
+  soft: "#2d6a6e",
   fail: "#ff9a70",
   failSoft: "#7c3a20",
   water: "#7db8ea",
   waterSoft: "#25445c",
-  wall: "#9aa2a6",
+  wall: "#7f898c",
   target: "#c8a2ec",
+  soil0: "#4c422f",
+  soil1: "#5b4a32",
+  soil2: "#45463a",
+  soil3: "#5a4633",
+  soil4: "#403829",
+  soil5: "#4c4941",
+  soil6: "#54402f",
+  soil7: "#38342b",
 };
 
-/** Soil tints from the top layer down: earth colours that differ in lightness. */
+/** Tints of soils in the order in which they are met: earth colours that differ in lightness. */
 export const soilTints: readonly string[] = [
-  "#e6d3ae",
-  "#cfae7c",
-  "#b98f63",
-  "#ddc7a0",
-  "#c3a58a",
-  "#a98a5e",
-  "#e9dcc3",
-  "#bfa06b",
+  palette.soil0,
+  palette.soil1,
+  palette.soil2,
+  palette.soil3,
+  palette.soil4,
+  palette.soil5,
+  palette.soil6,
+  palette.soil7,
 ];
 
 /** Turns the light colours of a drawing into the page's variables. */
 export function withVariables(svg: string): string {
-  return Object.entries(palette).reduce(
-    (text, [role, colour]) => text.replaceAll(colour, `var(--${kebab(role)})`),
-    svg,
-  );
+  return svg.replace(/#[0-9a-f]{6}\b/g, (colour) => {
+    const role = roles.get(colour);
+    return role === undefined ? colour : `var(--${kebab(role)})`;
+  });
 }
+
+const roles: ReadonlyMap<string, string> = new Map(Object.entries(palette).map(([role, colour]) => [colour, role]));
 
 export const kebab = (role: string): string => role.replace(/[A-Z]/g, (letter) => `-${letter.toLowerCase()}`);
 

@@ -1,4 +1,6 @@
-import { palette, withVariables } from "./palette.ts";
+import { chartWidth } from "./charts/common.ts";
+import { palette } from "./palette.ts";
+import { textWidth } from "./text-width.ts";
 
 /** A Vega-Lite specification as plain data. */
 export type ChartSpec = Readonly<Record<string, unknown>>;
@@ -10,6 +12,8 @@ export interface Chart {
   readonly title: string;
   /** The same for those who cannot see it, with the figures that matter. */
   readonly alternative: string;
+  /** Limit state, where the whole chart is of one. */
+  readonly state?: string;
   readonly spec: ChartSpec;
 }
 
@@ -17,18 +21,19 @@ export interface Chart {
 const look = {
   background: "transparent",
   font: "system-ui, 'Segoe UI', Roboto, 'Helvetica Neue', Arial, sans-serif",
-  padding: 4,
+  padding: 2,
   view: { stroke: null },
   axis: {
-    labelColor: palette.muted,
-    titleColor: palette.ink,
-    titleFontWeight: 500,
+    labelColor: palette.ink,
+    titleColor: palette.muted,
+    titleFontWeight: 400,
     labelFontSize: 12,
     titleFontSize: 12,
     gridColor: palette.grid,
     domainColor: palette.muted,
     tickColor: palette.muted,
-    labelLimit: 480,
+    labelLimit: 0,
+    titlePadding: 8,
   },
   legend: {
     labelColor: palette.ink,
@@ -36,28 +41,26 @@ const look = {
     labelFontSize: 12,
     titleFontSize: 12,
     orient: "top",
-    labelLimit: 300,
+    labelLimit: 0,
+    symbolStrokeWidth: 1.5,
   },
-  header: { labelColor: palette.ink, titleColor: palette.ink, labelFontSize: 12 },
-  title: { color: palette.ink, fontSize: 13, fontWeight: 600, anchor: "start" },
+  header: { labelColor: palette.ink, titleColor: palette.ink, labelFontSize: 12, labelFontWeight: 600 },
+  title: { color: palette.ink, fontSize: 12, fontWeight: 600, anchor: "start" },
+  text: { color: palette.ink, fontSize: 12 },
 } as const;
 
 /**
- * Chart → SVG text in the light colours. Vega is loaded on first use; its loader refuses every address, and expressions run through
- * the interpreter, so that nothing is fetched and no code is made from strings.
+ * Chart → SVG text in the light colours. Vega is loaded on first use; its loader refuses every address, and expressions run
+ * through the interpreter, so that nothing is fetched and no code is made from strings.
  */
-export async function renderChart(chart: Chart): Promise<string> {
+export async function renderChart(chart: Pick<Chart, "spec">): Promise<string> {
   const [vega, { compile }, { expressionInterpreter }] = await Promise.all([
     import("vega"),
     import("vega-lite"),
     import("vega-interpreter"),
   ]);
-  const { spec } = compile(
-    { $schema: "https://vega.github.io/schema/vega-lite/v6.json", config: look, ...chart.spec } as never,
-    {
-      logger: quiet,
-    } as never,
-  );
+  textMetricsOf(vega).width = (item, words) => textWidth(String(words ?? ""), item.fontSize ?? 11);
+  const { spec } = compile({ ...fitted(chart.spec), config: look } as never, { logger: quiet } as never);
   const loader = vega.loader();
   loader.load = async () => {
     throw new Error("a chart of the report loads nothing");
@@ -76,17 +79,24 @@ export async function renderChart(chart: Chart): Promise<string> {
   }
 }
 
-const quiet = { level: () => quiet, error: () => quiet, warn: () => quiet, info: () => quiet, debug: () => quiet };
-
-/** For the page: colours as variables, a title and a description for screen readers. */
-export function pageSvg(
-  svg: string,
-  chart: Pick<Chart, "title" | "alternative">,
-  escapeText: (text: string) => string,
-): string {
-  const named = svg.replace(
-    /<svg /,
-    `<svg role="img" aria-label="${escapeText(`${chart.title}. ${chart.alternative}`)}" `,
-  );
-  return withVariables(named);
+/** Charts of one view fill the width they ask for, labels included; grids and facets reckon their own. */
+function fitted(spec: ChartSpec): ChartSpec {
+  const single = !("facet" in spec || "concat" in spec || "hconcat" in spec || "vconcat" in spec);
+  return {
+    $schema: "https://vega.github.io/schema/vega-lite/v6.json",
+    ...(single ? { width: chartWidth, autosize: { type: "fit-x", contains: "padding" } } : {}),
+    ...spec,
+  };
 }
+
+/**
+ * How Vega measures words: by a canvas where there is one. Without it every letter counts 0.8 of the size, and labels that would fit
+ * are cut; the page, made once on a machine without a canvas, must not depend on where it was made either.
+ */
+interface TextMetrics {
+  width: (item: { readonly fontSize?: number }, words: unknown) => number;
+}
+
+const textMetricsOf = (vega: object): TextMetrics => (vega as { readonly textMetrics: TextMetrics }).textMetrics;
+
+const quiet = { level: () => quiet, error: () => quiet, warn: () => quiet, info: () => quiet, debug: () => quiet };

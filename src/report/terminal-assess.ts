@@ -1,9 +1,10 @@
 import type { AssessResult, Driver, LimitStateAssessment, MonteCarloResult } from "../results.ts";
 import type { Study } from "../study/study.ts";
 import { capitalised, type Display, displayIn, limitStateWords } from "./display.ts";
-import { estimateSentence, grouped, indexText, oneIn, probabilityText, significant, threeFigures } from "./number.ts";
+import { grouped, indexText, probabilityText, significant, threeFigures } from "./number.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, type TerminalOptions } from "./terminal.ts";
+import { againstTarget, countedEstimate, estimateSentence, orList, wallEstimate } from "./wording.ts";
 
 /** `toehold assess` for reading: one page of answers, or with `all` every method and measure. */
 export function terminalAssess(result: AssessResult, study: Study, options: TerminalOptions): string {
@@ -24,26 +25,12 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
 
 /** A sentence for the wall and one for each limit state, against the target where there is one. */
 function answer(result: AssessResult, { width }: TerminalOptions): string[] {
-  const whole = `The wall fails by ${orList(Object.keys(result.limitStates).map((name) => limitStateWords[name] ?? name))}: ${estimateSentence(result.system.monteCarlo)}.`;
+  const whole = `The wall fails by ${orList(Object.keys(result.limitStates).map((name) => limitStateWords[name] ?? name))}: ${estimateSentence(wallEstimate(result))}.`;
   const each = Object.entries(result.limitStates).map(
-    ([name, state]) => `${capitalised(limitStateWords[name] ?? name)}: ${estimateSentence(state.monteCarlo)}.`,
+    ([name, state]) =>
+      `${capitalised(limitStateWords[name] ?? name)}: ${estimateSentence(countedEstimate(state.monteCarlo))}.`,
   );
   return [whole, ...each, ...againstTarget(result)].flatMap((sentence) => wrap(sentence, width, "  "));
-}
-
-export function againstTarget(result: AssessResult): string[] {
-  const { target, bestEstimate } = result;
-  if (target === undefined) return [];
-  const named = `${oneIn(target.probability)} (index ${indexText(target.reliabilityIndex)}${target.period === undefined ? "" : `, ${target.period} years`}${target.reason === undefined ? "" : `; ${target.reason}`})`;
-  const [low, high] = bestEstimate.interval;
-  if (high <= target.probability) return [`The whole interval lies below the target of ${named}.`];
-  if (low > target.probability) return [`The whole interval lies above the target of ${named}.`];
-  return [`The target of ${named} lies within the interval: this run does not tell whether it is met.`];
-}
-
-function orList(words: readonly string[]): string {
-  if (words.length < 2) return words.join("");
-  return `${words.slice(0, -1).join(", ")} or ${words[words.length - 1]}`;
 }
 
 function probabilityTable(result: AssessResult, { width }: TerminalOptions): string {

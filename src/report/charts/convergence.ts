@@ -1,49 +1,67 @@
 import type { ConvergencePoint } from "../../results.ts";
-import { grouped, probabilityText } from "../number.ts";
+import { grouped, intervalText, probabilityText, superscript } from "../number.ts";
+import { markWords } from "../page-svg.ts";
 import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
 
 /** The estimate of the probability that any limit state fails, as samples come in, with its 95 % interval. */
 export function convergenceChart(points: readonly ConvergencePoint[]): Chart {
+  const most = Math.max(...points.map((point) => point.interval[1]), 1e-300);
+  const power = most > 0.1 ? 0 : Math.floor(Math.log10(most));
+  const unit = 10 ** power;
   const values = points.map(({ samples, probability, interval }) => ({
     samples,
-    probability,
-    low: interval[0],
-    high: interval[1],
+    probability: probability / unit,
+    low: interval[0] / unit,
+    high: interval[1] / unit,
+    tip: markWords(
+      `After ${grouped(samples)} samples: ${probabilityText(probability)}, interval ${intervalText(interval)}`,
+    ),
   }));
   const last = points.at(-1);
-  const x = {
-    field: "samples",
-    type: "quantitative",
-    title: "Samples",
-    scale: { type: "log", nice: false },
-    axis: { format: "~s", tickCount: 5 },
-  };
-  const y = {
-    type: "quantitative",
-    title: "Probability of any failure",
-    axis: { format: "~g", tickCount: 5 },
-    scale: { zero: false },
-  };
+  const lowest = Math.min(...values.map((row) => row.low));
   return {
     id: "convergence",
     title: "How the estimate settled as samples came in",
     alternative:
       last === undefined
         ? "No samples."
-        : `After ${grouped(last.samples)} samples ${probabilityText(last.probability)}, interval ${probabilityText(last.interval[0])} to ${probabilityText(last.interval[1])}.`,
+        : `After ${grouped(last.samples)} samples ${probabilityText(last.probability)}, interval ${intervalText(last.interval)}.`,
     spec: {
       data: { values },
-      width: 520,
-      height: 170,
+      height: 190,
+      encoding: {
+        x: {
+          field: "samples",
+          type: "quantitative",
+          scale: { type: "log", nice: false },
+          axis: { title: "Samples", format: "~s", tickCount: 6, grid: false },
+        },
+        y: {
+          type: "quantitative",
+          scale: { zero: false, domainMin: Math.max(lowest - 0.1 * (most / unit - lowest), 0) },
+          axis: {
+            title: `Probability of any failure${power === 0 ? "" : `, × 10${superscript(power)}`}`,
+            tickCount: 5,
+          },
+        },
+      },
       layer: [
         {
-          mark: { type: "area", color: palette.soft, opacity: 0.6 },
-          encoding: { x, y: { field: "low", ...y }, y2: { field: "high" } },
+          mark: { type: "area", color: palette.soft, opacity: 0.55, aria: false },
+          encoding: { y: { field: "low" }, y2: { field: "high" } },
         },
         {
-          mark: { type: "line", color: palette.main, point: { color: palette.main, size: 22 } },
-          encoding: { x, y: { field: "probability", ...y } },
+          mark: { type: "rule", color: palette.soft, strokeWidth: 3 },
+          encoding: { y: { field: "low" }, y2: { field: "high" }, description: { field: "tip" } },
+        },
+        {
+          mark: { type: "line", color: palette.main, strokeWidth: 2, aria: false },
+          encoding: { y: { field: "probability" } },
+        },
+        {
+          mark: { type: "point", filled: true, color: palette.main, size: 45, opacity: 1 },
+          encoding: { y: { field: "probability" }, description: { field: "tip" } },
         },
       ],
     },

@@ -1,9 +1,24 @@
-import type { AssessResult, FailurePicture } from "../../results.ts";
-import { capitalised, type Display } from "../display.ts";
-import { significant } from "../number.ts";
+import type { AssessResult, FailurePicture, VariableSummary } from "../../results.ts";
+import type { Display } from "../display.ts";
+import { grouped, shiftText } from "../number.ts";
+import { markWords } from "../page-svg.ts";
 import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
-import { shortened } from "./labels.ts";
+import { shortened } from "../shortened.ts";
+
+/** Pictures of one chart: three in a row, two rows. */
+const mostPictures = 6;
+const believed = "as believed";
+const failing = "among failures";
+/** A bin that holds less than this is not worth the room, unless the other side fills it. */
+const leastBelieved = 2e-3;
+const leastFailing = 5e-3;
+
+interface Shifted {
+  readonly picture: FailurePicture;
+  readonly variable: VariableSummary;
+  readonly shift: number;
+}
 
 /** Small pictures: each unknown as believed and as found among the failures; those that shift most. */
 export function failurePictureChart(
@@ -11,72 +26,88 @@ export function failurePictureChart(
   pictures: readonly FailurePicture[],
   display: Display,
 ): Chart | undefined {
-  if (pictures.length === 0) return undefined;
-  const variables = new Map(result.variables.map((variable) => [variable.path, variable]));
-  const shiftOf = (picture: FailurePicture): number => {
-    const variable = variables.get(picture.path);
-    return variable === undefined || variable.sd === 0 ? 0 : (picture.meanGivenFailure - variable.mean) / variable.sd;
-  };
-  const shown = [...pictures].sort((a, b) => Math.abs(shiftOf(b)) - Math.abs(shiftOf(a))).slice(0, 6);
-  const charts = shown.map((picture) => {
-    const variable = variables.get(picture.path);
-    const unit = variable?.unit ?? "–";
-    const factor = display.factor(unit);
-    const values = (["prior", "givenFailure"] as const).flatMap((key) =>
-      steps(picture, key).map(({ x, y }) => ({
-        x: x * factor,
-        y,
-        which: key === "prior" ? "as believed" : "among failures",
-      })),
-    );
-    const name = display.unit(unit) === "–" ? "" : `, ${display.unit(unit)}`;
-    return {
-      data: { values },
-      width: 165,
-      height: 90,
-      title: { text: shortened(variable?.label ?? picture.path, 34), fontSize: 12, fontWeight: 500 },
-      mark: { type: "area", interpolate: "step-after", opacity: 0.55, line: true },
-      encoding: {
-        x: {
-          field: "x",
-          type: "quantitative",
-          title: `Value${name}`,
-          scale: { zero: false, nice: false },
-          axis: { tickCount: 4, grid: false },
-        },
-        y: { field: "y", type: "quantitative", title: null, stack: null, axis: null },
-        color: {
-          field: "which",
-          type: "nominal",
-          title: null,
-          scale: { domain: ["as believed", "among failures"], range: [palette.soft, palette.fail] },
-        },
-      },
-    };
-  });
+  const shown = shiftedMost(result, pictures);
+  if (shown.length === 0) return undefined;
   const words = shown
     .slice(0, 3)
     .map(
-      (picture) =>
-        `${variables.get(picture.path)?.label ?? picture.path} shifts by ${significant(shiftOf(picture), 2)} standard deviations`,
+      ({ variable, shift, picture }) =>
+        `${variable.label}: mean ${display.quantity(picture.meanGivenFailure, variable.unit)} among failures, ${display.quantity(variable.mean, variable.unit)} as believed (${shiftText(shift)} standard deviations)`,
     );
   return {
     id: "failure-picture",
     title: "The unknowns as believed, and among the samples in which the wall fails",
-    alternative: `${capitalised(words.join("; "))}.`,
-    spec: { concat: charts, columns: 3, spacing: 26 },
+    alternative: `${words.join("; ")}. From ${grouped(shown[0].picture.failures)} failing samples.`,
+    spec: {
+      concat: shown.map((one) => panel(one, display)),
+      columns: 3,
+      spacing: { row: 22, column: 42 },
+    },
   };
 }
 
-/** Density as steps: share over width of each bin of finite width. */
+function shiftedMost({ variables }: AssessResult, pictures: readonly FailurePicture[]): readonly Shifted[] {
+  const byPath = new Map(variables.map((variable) => [variable.path, variable]));
+  return pictures
+    .flatMap((picture): readonly Shifted[] => {
+      const variable = byPath.get(picture.path);
+      if (variable === undefined || !(variable.sd > 0)) return [];
+      return [{ picture, variable, shift: (picture.meanGivenFailure - variable.mean) / variable.sd }];
+    })
+    .sort((a, b) => Math.abs(b.shift) - Math.abs(a.shift))
+    .slice(0, mostPictures);
+}
+
+function panel({ picture, variable, shift }: Shifted, display: Display): object {
+  const factor = display.factor(variable.unit);
+  const unit = display.unit(variable.unit);
+  const values = [
+    ...steps(picture, "prior").map(({ x, y }) => ({ x: x * factor, y, which: believed })),
+    ...steps(picture, "givenFailure").map(({ x, y }) => ({ x: x * factor, y, which: failing })),
+  ];
+  const mean = (value: number): string => display.quantity(value, variable.unit);
+  const tip = `${variable.label}: mean ${mean(variable.mean)} as believed, ${mean(picture.meanGivenFailure)} among failures`;
+  return {
+    data: { values },
+    width: 254,
+    height: 92,
+    title: {
+      text: `${shortened(variable.label, 36)}${unit === "–" ? "" : `, ${unit}`}`,
+      subtitle: `shifts by ${shiftText(shift)} standard deviations`,
+      subtitleColor: palette.muted,
+      subtitleFontSize: 11.5,
+      offset: 6,
+    },
+    mark: { type: "area", interpolate: "step-after", line: { strokeWidth: 1.5 }, fillOpacity: 0.5 },
+    encoding: {
+      x: {
+        field: "x",
+        type: "quantitative",
+        scale: { zero: false, nice: false },
+        axis: { title: null, tickCount: 5, grid: false },
+      },
+      y: { field: "y", type: "quantitative", stack: null, axis: null },
+      color: {
+        field: "which",
+        type: "nominal",
+        legend: { title: null, symbolType: "square", symbolOpacity: 1 },
+        scale: { domain: [believed, failing], range: [palette.main, palette.fail] },
+      },
+      description: { value: markWords(tip) },
+    },
+  };
+}
+
+/** Density as steps: share over width of each bin, without the empty tails of both. */
 function steps(picture: FailurePicture, key: "prior" | "givenFailure"): readonly { x: number; y: number }[] {
-  const { edges } = picture;
-  const rows = picture[key].flatMap((share, bin) => {
+  const { edges, prior, givenFailure } = picture;
+  const holds = (bin: number): boolean => prior[bin] > leastBelieved || givenFailure[bin] > leastFailing;
+  const bins = prior.map((_, bin) => bin);
+  const first = bins.find(holds) ?? 0;
+  const last = bins.findLast(holds) ?? prior.length - 1;
+  const rows = bins.slice(first, last + 1).flatMap((bin) => {
     const width = edges[bin + 1] - edges[bin];
-    return width > 1e-12 * Math.max(1, Math.abs(edges[bin])) && bin >= 6 && bin < picture[key].length - 6
-      ? [{ x: edges[bin], y: share / width, end: edges[bin + 1] }]
-      : [];
+    return width > 1e-12 * Math.max(1, Math.abs(edges[bin])) ? [{ x: edges[bin], y: picture[key][bin] / width }] : [];
   });
-  const last = rows.at(-1);
-  return last === undefined ? [] : [...rows.map(({ x, y }) => ({ x, y })), { x: last.end, y: 0 }];
+  return rows.length === 0 ? [] : [...rows, { x: edges[last + 1], y: 0 }];
 }

@@ -1,95 +1,151 @@
 import type { AssessResult } from "../../results.ts";
-import { capitalised, limitStateWords } from "../display.ts";
-import { estimateSentence } from "../number.ts";
+import { limitStateName } from "../display.ts";
+import { oneIn, probabilityText } from "../number.ts";
+import { markWords } from "../page-svg.ts";
 import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
+import {
+  allFailed,
+  countedEstimate,
+  type Estimate,
+  estimateSentence,
+  noneSeen,
+  oneInCell,
+  wallEstimate,
+} from "../wording.ts";
+import { decadeLabels, decades } from "./common.ts";
 
-/** Probability of each limit state and of any of them, with its interval, on a logarithmic axis, against the target. */
+/** Name of the row of the wall as a whole. */
+const whole = "The wall";
+
+/** Probability of each limit state and of the wall, with its interval, on a logarithmic axis, against the target. */
 export function probabilityChart(result: AssessResult): Chart {
-  const named = [
-    ...Object.entries(result.limitStates).map(([name, state]) => ({
-      name: capitalised(limitStateWords[name] ?? name),
-      mc: state.monteCarlo,
+  const named: readonly { name: string; state: string; estimate: Estimate }[] = [
+    ...Object.entries(result.limitStates).map(([state, { monteCarlo }]) => ({
+      name: limitStateName(state),
+      state,
+      estimate: countedEstimate(monteCarlo),
     })),
-    { name: "Any of these", mc: result.system.monteCarlo },
+    { name: whole, state: "any", estimate: wallEstimate(result) },
   ];
-  const least = Math.min(
-    ...named
-      .flatMap(({ mc }) => [mc.interval[0], mc.interval[1], mc.probability])
-      .concat(result.target?.probability ?? 1)
-      .filter((p) => p > 0),
-  );
-  const floor = 10 ** Math.floor(Math.log10(least) - 0.3);
-  const values = named.map(({ name, mc }) => ({
-    name,
-    probability: mc.failures === 0 ? null : mc.probability,
-    low: Math.max(mc.interval[0], floor),
-    high: mc.interval[1],
-    none: mc.failures === 0,
-  }));
-  const scale = { type: "log", domain: [floor, 1] };
-  const x = {
-    type: "quantitative",
-    scale,
-    title: "Probability of failure",
-    axis: { format: "~e", grid: true, tickCount: 6 },
-  };
-  const y = { field: "name", type: "nominal", sort: null, title: null };
-  const target =
-    result.target === undefined
-      ? []
-      : [
-          {
-            data: { values: [{ target: result.target.probability }] },
-            mark: { type: "rule", color: palette.target, strokeDash: [6, 3], strokeWidth: 2 },
-            encoding: { x: { field: "target", ...x } },
-          },
-          {
-            data: { values: [{ target: result.target.probability }] },
-            mark: {
-              type: "text",
-              color: palette.target,
-              align: "left",
-              dx: 5,
-              baseline: "top",
-              fontSize: 12,
-              text: "target",
-            },
-            encoding: { x: { field: "target", ...x }, y: { value: 0 } },
-          },
-        ];
+  const seen = named.flatMap(({ estimate: { interval, probability } }) => [...interval, probability]);
+  const { floor, values } = decades(Math.min(...[...seen, result.target?.probability ?? 1].filter((p) => p > 0)));
   return {
     id: "probabilities",
     title: "Probability of each kind of failure, with its 95 % interval",
-    alternative: named.map(({ name, mc }) => `${name}: ${estimateSentence(mc)}`).join(". "),
+    alternative: named.map(({ name, estimate }) => `${name}: ${estimateSentence(estimate)}`).join(". "),
     spec: {
-      data: { values },
-      width: 520,
-      height: { step: 38 },
-      layer: [
-        {
-          mark: { type: "rule", strokeWidth: 7, color: palette.soft, strokeCap: "round" },
-          encoding: { x: { field: "low", ...x }, x2: { field: "high" }, y },
-        },
-        {
-          transform: [{ filter: "!datum.none" }],
-          mark: { type: "point", filled: true, size: 90, color: palette.main, opacity: 1 },
-          encoding: { x: { field: "probability", ...x }, y },
-        },
-        {
-          transform: [{ filter: "datum.none" }],
-          mark: {
-            type: "text",
-            text: "none seen, so below this",
-            align: "left",
-            dx: 8,
-            color: palette.muted,
-            fontSize: 12,
+      data: { values: named.map((row) => rowOf(row.name, row.state, row.estimate, floor)) },
+      height: { step: 40 },
+      encoding: {
+        y: {
+          field: "name",
+          type: "nominal",
+          sort: null,
+          title: null,
+          axis: {
+            ticks: false,
+            domain: false,
+            labelPadding: 10,
+            labelFontSize: 13,
+            labelFontWeight: { condition: { test: `datum.value === '${whole}'`, value: 700 }, value: 400 },
           },
-          encoding: { x: { field: "high", ...x }, y },
         },
-        ...target,
-      ],
+        x: {
+          type: "quantitative",
+          scale: { type: "log", domain: [floor, 1], nice: false },
+          axis: {
+            title: "Probability of failure",
+            values,
+            labelExpr: decadeLabels,
+            labelLineHeight: 15,
+            labelFlush: false,
+          },
+        },
+      },
+      layer: [...targetLayers(result.target?.probability), ...rowLayers()],
     },
   };
+}
+
+function rowOf(name: string, state: string, estimate: Estimate, floor: number): Record<string, unknown> {
+  const none = noneSeen(estimate);
+  const [low, high] = estimate.interval;
+  const far = high > 0.03;
+  return {
+    name,
+    probability: none ? null : Math.max(estimate.probability, floor),
+    low: Math.max(low, floor),
+    high: Math.max(high, floor),
+    end: far ? Math.max(low, floor) : Math.max(high, floor),
+    far,
+    kind: none ? "none" : allFailed(estimate) ? "all" : "some",
+    words: none ? `none seen: rarer than ${oneIn(high)}` : oneInCell(estimate),
+    tip: markWords(
+      `${name}: ${estimateSentence(estimate)} (${probabilityText(low)} to ${probabilityText(high)})`,
+      state,
+    ),
+  };
+}
+
+function rowLayers(): readonly object[] {
+  const tip = { field: "tip" };
+  const words = (far: boolean, halo: boolean): object => ({
+    transform: [{ filter: far ? "datum.far" : "!datum.far" }],
+    mark: {
+      type: "text",
+      align: far ? "right" : "left",
+      dx: far ? -12 : 12,
+      fontSize: 13,
+      fontWeight: 600,
+      aria: false,
+      ...(halo ? { stroke: palette.paper, strokeWidth: 5, strokeJoin: "round" } : {}),
+    },
+    encoding: { x: { field: "end" }, text: { field: "words" } },
+  });
+  return [
+    {
+      mark: { type: "rule", strokeWidth: 9, color: palette.soft, strokeCap: "round" },
+      encoding: { x: { field: "low" }, x2: { field: "high" }, description: tip },
+    },
+    {
+      transform: [{ filter: "datum.kind !== 'none'" }],
+      mark: { type: "point", filled: true, size: 110, color: palette.main, opacity: 1 },
+      encoding: { x: { field: "probability" }, description: tip },
+    },
+    {
+      transform: [{ filter: "datum.kind === 'none'" }],
+      mark: { type: "tick", color: palette.main, thickness: 2.5, size: 18 },
+      encoding: { x: { field: "high" }, description: tip },
+    },
+    ...[false, true].flatMap((far) => [words(far, true), words(far, false)]),
+  ];
+}
+
+function targetLayers(target: number | undefined): readonly object[] {
+  if (target === undefined) return [];
+  const data = { values: [{ target }] };
+  const x = { field: "target" };
+  return [
+    {
+      data,
+      mark: { type: "rule", color: palette.target, strokeDash: [6, 3], strokeWidth: 2 },
+      encoding: { x, y: null, description: { value: markWords(`Target: ${oneIn(target)}`) } },
+    },
+    {
+      data,
+      mark: {
+        type: "text",
+        color: palette.target,
+        align: "left",
+        baseline: "bottom",
+        dx: -3,
+        dy: -4,
+        fontWeight: 600,
+        text: `target ${oneIn(target)}`,
+        aria: false,
+      },
+      encoding: { x, y: { value: 0 } },
+    },
+  ];
 }

@@ -1,54 +1,84 @@
 import type { AssessResult } from "../../results.ts";
-import { capitalised, limitStateWords } from "../display.ts";
+import { limitStateName } from "../display.ts";
+import { shareText } from "../number.ts";
+import { markWords } from "../page-svg.ts";
 import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
-import { labelsOf, mostRows } from "./labels.ts";
+import { chartWidth, labelRoom, labelsOf, mostRows } from "./common.ts";
 
 /** First-order shares of every variable, a column of bars for each limit state. */
 export function sharesChart(result: AssessResult): Chart {
   const labels = labelsOf(result);
   const states = Object.entries(result.limitStates);
-  const strength = (path: string): number =>
-    Math.max(...states.map(([, state]) => Math.abs(state.firstOrderSecondMoment.contributions[path] ?? 0)));
+  const shareOf = (path: string, k: number): number => states[k][1].firstOrderSecondMoment.contributions[path] ?? 0;
+  const strength = (path: string): number => Math.max(...states.map((_, k) => Math.abs(shareOf(path, k))));
   const paths = result.variables
     .map((variable) => variable.path)
     .sort((a, b) => strength(b) - strength(a))
     .slice(0, mostRows);
-  const values = states.flatMap(([name, state]) =>
-    paths.map((path) => ({
-      variable: labels(path),
-      state: capitalised(limitStateWords[name] ?? name),
-      share: 100 * (state.firstOrderSecondMoment.contributions[path] ?? 0),
-    })),
+  const values = states.flatMap(([name], k) =>
+    paths.map((path) => {
+      const share = shareOf(path, k);
+      return {
+        variable: labels(path),
+        state: limitStateName(name),
+        share: 100 * share,
+        words: Math.abs(share) < 0.01 ? "" : shareText(share),
+        tip: markWords(`${labels(path)}: ${shareText(share)} of the variance, ${limitStateName(name)}`, name),
+      };
+    }),
   );
-  const strongest = states.map(([name]) => {
-    const top = values
-      .filter((row) => row.state === capitalised(limitStateWords[name] ?? name))
-      .sort((a, b) => b.share - a.share)[0];
-    return top === undefined ? "" : `${top.state}: ${top.variable}, ${Math.round(top.share)} %`;
+  const strongest = states.map(([name], k) => {
+    const top = [...paths].sort((a, b) => shareOf(b, k) - shareOf(a, k))[0];
+    return top === undefined ? "" : `${limitStateName(name)}: ${labels(top)}, ${shareText(shareOf(top, k))}`;
   });
+  const room = chartWidth - labelRoom(paths.map(labels)) - 18 * (states.length - 1);
+  const most = Math.max(...values.map((row) => row.share), 1);
+  const least = Math.min(...values.map((row) => row.share), 0);
   return {
     id: "shares",
-    title: "Share of each unknown in the spread of the factor of safety",
+    title: "Share of each unknown in the variance of the factor of safety",
     alternative: `The largest: ${strongest.join("; ")}.`,
     spec: {
       data: { values },
+      spacing: 18,
       facet: {
         column: {
           field: "state",
           type: "nominal",
           title: null,
-          sort: states.map(([name]) => capitalised(limitStateWords[name] ?? name)),
+          sort: states.map(([name]) => limitStateName(name)),
+          header: { labelAnchor: "start" },
         },
       },
       spec: {
-        width: 150,
+        width: Math.floor(room / Math.max(states.length, 1)),
         height: { step: 22 },
-        mark: { type: "bar", color: palette.main, height: { band: 0.7 } },
         encoding: {
-          y: { field: "variable", type: "nominal", sort: null, title: null, axis: { labelLimit: 480 } },
-          x: { field: "share", type: "quantitative", title: "Share, %", axis: { tickCount: 4 } },
+          y: {
+            field: "variable",
+            type: "nominal",
+            sort: null,
+            title: null,
+            axis: { ticks: false, domain: false, labelPadding: 8 },
+          },
+          x: {
+            field: "share",
+            type: "quantitative",
+            axis: null,
+            scale: { domain: [least < 0 ? 1.3 * least : 0, 1.3 * most], nice: false },
+          },
         },
+        layer: [
+          {
+            mark: { type: "bar", color: palette.main, height: { band: 0.66 } },
+            encoding: { description: { field: "tip" } },
+          },
+          {
+            mark: { type: "text", align: "left", dx: 4, aria: false },
+            encoding: { x: { field: "share", type: "quantitative" }, text: { field: "words" } },
+          },
+        ],
       },
     },
   };

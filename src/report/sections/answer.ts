@@ -1,70 +1,129 @@
-import type { AssessResult, MonteCarloResult, ReportInput } from "../../results.ts";
+import type { AssessResult, ReportInput } from "../../results.ts";
+import { chartFigure } from "../chart-figure.ts";
 import { probabilityChart } from "../charts/probabilities.ts";
-import { capitalised, limitStateWords } from "../display.ts";
+import { limitStateName, limitStateWords } from "../display.ts";
 import { escapeHtml } from "../escape.ts";
-import { figure, htmlTable } from "../markup.ts";
-import { estimateSentence, grouped, indexText, oneIn, probabilityText, significant } from "../number.ts";
-import { pageSvg, renderChart } from "../render-chart.ts";
-import { againstTarget } from "../terminal-assess.ts";
+import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
+import { betweenText, grouped, indexText, intervalText, oneIn, probabilityText, significant } from "../number.ts";
+import {
+  againstTarget,
+  allFailed,
+  countedEstimate,
+  type Estimate,
+  estimateSentence,
+  noneSeen,
+  oneInCell,
+  orList,
+  periodSentence,
+  standing,
+  wallEstimate,
+} from "../wording.ts";
 
-/** What the page is opened for: one sentence for the wall, one for each limit state, against the target. */
-export async function answerSection({ assess }: ReportInput): Promise<string> {
-  const states = Object.entries(assess.limitStates);
-  const words = states.map(([name]) => limitStateWords[name] ?? name);
-  const list = words.length < 2 ? words.join("") : `${words.slice(0, -1).join(", ")} or ${words[words.length - 1]}`;
-  const unfinished = assess.run.complete
-    ? ""
-    : `<p class="answer">This run was stopped before its end; what follows rests on the first ${escapeHtml(grouped(assess.run.sampling.evaluations))} samples.</p>`;
-  const sentences = states.map(
-    ([name, state]) =>
-      `<li>${escapeHtml(`${capitalised(limitStateWords[name] ?? name)}: ${estimateSentence(state.monteCarlo)}.`)}</li>`,
+/** What the page is opened for: a sentence for the wall and one for each limit state, against the target. */
+export async function answerSection({ assess }: ReportInput): Promise<PageSection> {
+  return section(
+    "answer",
+    "The answer",
+    unfinished(assess),
+    answerSentence(assess),
+    ...againstTarget(assess).map((sentence) => paragraph(sentence, "against")),
+    `<ul class="states">${Object.entries(assess.limitStates)
+      .map(
+        ([name, state]) =>
+          `<li data-state="${name}"><b>${escapeHtml(limitStateName(name))}:</b> ${escapeHtml(stateSentence(assess, countedEstimate(state.monteCarlo), state.firstOrderReliability?.probability ?? null))}</li>`,
+      )
+      .join("")}</ul>`,
+    await chartFigure(
+      probabilityChart(assess),
+      "Bars are 95 % intervals of the sampling alone; how far the model behind them can be trusted stands further down.",
+    ),
+    probabilityTable(assess),
+    paragraph(periodSentence(assess), "quiet"),
   );
-  const chart = probabilityChart(assess);
-  return `<section id="answer">${unfinished}<p class="answer">${answerSentence(assess.system.monteCarlo, list)}${escapeHtml(targetSentence(assess))}</p><ul>${sentences.join("")}</ul>${figure(pageSvg(await renderChart(chart), chart, escapeHtml), chart.title, "Bars are 95 % intervals of the sampling alone; what the numbers rest on stands further down.")}${probabilityTable(assess)}<p class="quiet">${escapeHtml(periodSentence(assess))}</p></section>`;
 }
 
-function answerSentence(mc: MonteCarloResult, list: string): string {
-  const how = escapeHtml(list);
-  if (mc.failures === 0)
-    return `<strong>None of ${escapeHtml(grouped(mc.samples))} samples failed</strong> by ${how}. That shows only that the probability is below ${escapeHtml(oneIn(mc.interval[1]))}.`;
-  if (mc.failures === mc.samples)
-    return `<strong>Every one of ${escapeHtml(grouped(mc.samples))} samples failed</strong> by ${how}.`;
-  return `The probability that the wall fails by ${how} is <strong>${escapeHtml(estimateSentence(mc))}</strong>.`;
+function unfinished({ run }: AssessResult): string {
+  return run.complete
+    ? ""
+    : paragraph(
+        `This run was stopped before its end; what follows rests on the first ${grouped(run.sampling.evaluations)} samples.`,
+        "callout",
+      );
 }
 
-function targetSentence(assess: AssessResult): string {
-  const sentences = againstTarget(assess);
-  return sentences.length === 0 ? "" : ` ${sentences.join(" ")}`;
+/** The figure in large type, then what it is a figure of. */
+function answerSentence(assess: AssessResult): string {
+  const estimate = wallEstimate(assess);
+  const how = orList(Object.keys(assess.limitStates).map((name) => limitStateWords[name] ?? name));
+  const [big, rest] = answerParts(estimate, how);
+  return `<p class="answer"><strong>${escapeHtml(big)}</strong> ${escapeHtml(rest)}</p>`;
 }
 
-function periodSentence(assess: AssessResult): string {
-  return assess.bestEstimate.years === undefined
-    ? "No value in the study is yearly: the probability holds for the ground as it is, and is not per year."
-    : `The probability is of ${assess.bestEstimate.years} years.`;
+function answerParts(estimate: Estimate, how: string): readonly [big: string, rest: string] {
+  const { counted, interval, probability } = estimate;
+  if (noneSeen(estimate))
+    return [
+      "No failure seen",
+      `in ${grouped(counted?.samples ?? 0)} samples. That shows only that the probability that the wall fails by ${how} is below ${oneIn(interval[1])}, the upper end of the 95 % interval.`,
+    ];
+  if (allFailed(estimate))
+    return [
+      "Every sample failed:",
+      `the wall fails by ${how} in all of ${grouped(counted?.samples ?? 0)} samples, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
+    ];
+  return [
+    `About ${oneIn(probability)}`,
+    `is the probability that the wall fails by ${how}: ${betweenText(interval)} (95 % interval); as a number, ${probabilityText(probability)}.`,
+  ];
+}
+
+/** One limit state in words, with its place against the target and what the first order adds where sampling saw nothing. */
+function stateSentence({ target }: AssessResult, estimate: Estimate, firstOrder: number | null): string {
+  const places = {
+    below: "; the whole interval lies below the target",
+    above: "; the whole interval lies above the target",
+    open: "; the target lies within the interval",
+  };
+  const place = target === undefined ? "" : places[standing(estimate, target.probability)];
+  const beside =
+    noneSeen(estimate) && firstOrder !== null ? `. A first-order estimate puts it at ${oneIn(firstOrder)}` : "";
+  return `${estimateSentence(estimate)}${place}${beside}.`;
 }
 
 function probabilityTable(assess: AssessResult): string {
-  const row = (name: string, factor: string, mc: MonteCarloResult): string[] => [
+  const { target } = assess;
+  const row = (name: string, factor: string, estimate: Estimate): string[] => [
     name,
+    oneInCell(estimate),
+    probabilityText(estimate.probability),
+    intervalText(estimate.interval),
+    indexText(estimate.reliabilityIndex),
     factor,
-    mc.failures === 0 ? "none seen" : oneIn(mc.probability),
-    probabilityText(mc.probability),
-    `${probabilityText(mc.interval[0])} to ${probabilityText(mc.interval[1])}`,
-    indexText(mc.reliabilityIndex),
   ];
-  const rows = Object.entries(assess.limitStates).map(([name, state]) =>
-    row(capitalised(limitStateWords[name] ?? name), significant(state.factorAtMean, 3), state.monteCarlo),
+  const states = Object.entries(assess.limitStates);
+  const rows = states.map(([name, state]) =>
+    row(limitStateName(name), significant(state.factorAtMean, 3), countedEstimate(state.monteCarlo)),
   );
-  rows.push(row("Any of these", "", assess.system.monteCarlo));
+  rows.push(row("The wall", "", wallEstimate(assess)));
+  if (target !== undefined)
+    rows.push([
+      "Target",
+      oneIn(target.probability),
+      probabilityText(target.probability),
+      "",
+      indexText(target.reliabilityIndex),
+      "",
+    ]);
   return htmlTable(
     [
       { heading: "Limit state" },
-      { heading: "Factor of safety at the means", numeric: true },
       { heading: "Probability", numeric: true },
       { heading: "as a number", numeric: true },
       { heading: "95 % interval", numeric: true },
       { heading: "Reliability index", numeric: true },
+      { heading: "Factor of safety at the means", numeric: true },
     ],
     rows,
+    { states: states.map(([name]) => name) },
   );
 }

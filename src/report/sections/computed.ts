@@ -1,110 +1,115 @@
-import type { ReportInput, SheetLine } from "../../results.ts";
+import type { AssessResult, ReportInput } from "../../results.ts";
+import { chartFigure } from "../chart-figure.ts";
 import { convergenceChart } from "../charts/convergence.ts";
 import { factorHistogram } from "../charts/factor-histogram.ts";
-import { capitalised, type Display, limitStateWords } from "../display.ts";
-import { escapeHtml } from "../escape.ts";
-import { figure, htmlTable, paragraph, section } from "../markup.ts";
-import { grouped, indexText, probabilityText, significant, threeFigures } from "../number.ts";
-import { type Chart, pageSvg, renderChart } from "../render-chart.ts";
+import { limitStateName } from "../display.ts";
+import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
+import { grouped, indexText, intervalText, oneIn, probabilityText, significant } from "../number.ts";
 
-/** How it was computed: samples, methods side by side, forces, and the calculation that can be followed by hand. */
-export async function computedSection(input: ReportInput, display: Display): Promise<string> {
-  const { assess, check } = input;
-  const draw = async (chart: Chart, text: string): Promise<string> =>
-    figure(pageSvg(await renderChart(chart), chart, escapeHtml), chart.title, text);
+/** How the probabilities were computed: samples, histograms, methods side by side, convergence, what was counted. */
+export async function computedSection({ assess }: ReportInput): Promise<PageSection> {
   const histograms = await Promise.all(
-    Object.entries(assess.limitStates).map(async ([name, state]) =>
-      draw(factorHistogram(name, state), "The failed part is red."),
+    Object.entries(assess.limitStates).map(([name, state]) =>
+      chartFigure(factorHistogram(name, state), "Below 1, on the tinted side, the wall fails."),
     ),
   );
-  const convergence = await draw(
-    convergenceChart(assess.system.convergence),
-    "The band is the 95 % interval at each stage.",
-  );
+  const { convergence } = assess.system;
   return section(
     "computed",
     "How it was computed",
     paragraph(
-      `The stability calculation ran ${grouped(assess.run.sampling.evaluations)} times with values drawn from the distributions below (plain Monte Carlo sampling, seed “${assess.seed}”); a probability is the share of runs with a factor of safety below 1, with its 95 % Clopper–Pearson interval.`,
+      `The stability calculation ran ${grouped(assess.run.sampling.evaluations)} times with values drawn from the distributions below (${methodWords(assess)}, seed “${assess.seed}”). A probability is the share of runs with a factor of safety below 1; its interval is the 95 % Clopper–Pearson interval.`,
     ),
-    `<div class="pair">${histograms.join("")}</div>`,
-    convergence,
-    methodsTable(input),
-    `<h3>Forces at the means, per ${display.units === "us" ? "foot" : "metre"} run</h3>`,
-    forceTable(input, display),
-    "<h3>The calculation at the means, step by step</h3>",
+    `<div class="trio">${histograms.join("")}</div>`,
+    methodsTable(assess),
+    convergence.length > 1
+      ? await chartFigure(convergenceChart(convergence), "The band is the 95 % interval at each stage of the run.")
+      : paragraph("The run ended at its first look, so there is no course of the estimate to draw.", "quiet"),
+    countedTable(assess),
     paragraph(
-      display.units === "us"
-        ? "The numbers put in are in m, kN and kPa, in which the program reckons; results are in the study's units."
-        : "Each line gives the formula, the numbers put in and the result, so that it can be followed by hand.",
+      `Whatever the dependence between the limit states, the probability that any of them fails lies between ${probabilityText(assess.system.bounds[0])} and ${probabilityText(assess.system.bounds[1])}.`,
       "quiet",
     ),
-    sheetTable(check.sheet, display),
   );
 }
 
-function methodsTable({ assess }: ReportInput): string {
-  const rows = Object.entries(assess.limitStates).map(([name, { firstOrderSecondMoment: moment, monteCarlo }]) => [
-    capitalised(limitStateWords[name] ?? name),
-    `${significant(moment.mean, 3)} ± ${significant(moment.sd, 2)}`,
-    `${indexText(moment.reliabilityIndexNormal)} (${probabilityText(moment.probabilityNormal)})`,
-    `${indexText(moment.reliabilityIndexLognormal)} (${probabilityText(moment.probabilityLognormal)})`,
-    monteCarlo.failures === 0
-      ? "none seen"
-      : `${indexText(monteCarlo.reliabilityIndex)} (${probabilityText(monteCarlo.probability)})`,
-  ]);
+const methodWords = ({ bestEstimate }: AssessResult): string =>
+  bestEstimate.method.startsWith("plain") ? "plain Monte Carlo sampling" : bestEstimate.method.replaceAll("_", " ");
+
+/** Each method that ran, row by row, so that a reader sees where they agree. */
+function methodsTable({ limitStates }: AssessResult): string {
+  const rows: (readonly string[])[] = [];
+  const states: string[] = [];
+  for (const [name, state] of Object.entries(limitStates)) {
+    const {
+      firstOrderSecondMoment: moment,
+      monteCarlo,
+      firstOrderReliability: first,
+      secondOrderReliability: second,
+    } = state;
+    const add = (method: string, index: number | null, probability: number | null, note: string): void => {
+      const words = probability === null ? ["–", "–"] : [oneIn(probability), probabilityText(probability)];
+      rows.push([limitStateName(name), method, indexText(index), ...words, note]);
+      states.push(name);
+    };
+    const spread = `factor ${significant(moment.mean, 3)} ± ${significant(moment.sd, 2)}`;
+    add(
+      "Sampling",
+      monteCarlo.reliabilityIndex,
+      monteCarlo.probability,
+      `95 % interval ${intervalText(monteCarlo.interval)}`,
+    );
+    add("First-order second-moment, normal", moment.reliabilityIndexNormal, moment.probabilityNormal, spread);
+    add("First-order second-moment, lognormal", moment.reliabilityIndexLognormal, moment.probabilityLognormal, spread);
+    if (first !== undefined)
+      add(
+        "First-order reliability",
+        first.reliabilityIndex,
+        first.probability,
+        first.converged ? first.status : `not converged: ${first.status}`,
+      );
+    if (second !== undefined) add("Second-order reliability", second.reliabilityIndex, second.probability, "");
+  }
   return htmlTable(
     [
-      { heading: "Index (probability)" },
-      { heading: "Factor, first-order second-moment", numeric: true },
-      { heading: "if normal", numeric: true },
-      { heading: "if lognormal", numeric: true },
-      { heading: "by sampling", numeric: true },
+      { heading: "Limit state" },
+      { heading: "Method" },
+      { heading: "Index", numeric: true },
+      { heading: "Probability", numeric: true },
+      { heading: "as a number", numeric: true },
+      { heading: "Remark" },
     ],
     rows,
-    "The classic hand method beside the sampling. Where they part, the sampling is right within its interval; the hand method guesses the shape of the tail.",
+    {
+      caption:
+        "Methods side by side. Where they part, the sampling is right within its interval; the second-moment method guesses the shape of the tail.",
+      states,
+    },
   );
 }
 
-function forceTable({ check }: ReportInput, display: Display): string {
-  const rows = check.forces.map((force) => [
-    force.name,
-    display.number(force.horizontal, "kN/m"),
-    display.number(force.vertical, "kN/m"),
-    display.number(force.x, "m"),
-    display.number(force.z, "m"),
-  ]);
-  return htmlTable(
-    [
-      { heading: "Force" },
-      { heading: `Horizontal, ${display.unit("kN/m")}`, numeric: true },
-      { heading: `Vertical, ${display.unit("kN/m")}`, numeric: true },
-      { heading: `x, ${display.unit("m")}`, numeric: true },
-      { heading: `z, ${display.unit("m")}`, numeric: true },
-    ],
-    rows,
-    "Horizontal is positive towards the front, vertical downwards; x from the tip of the toe, z from the underside of the base.",
+/** Samples that a formula had to be stretched for: counted and shown, never hidden. */
+function countedTable({ limitStates, system }: AssessResult): string {
+  const { counts, samples } = system.monteCarlo;
+  const kinds: readonly (readonly [string, number])[] = [
+    ["slope behind steeper than its soil can bear", counts.slopeUnstable],
+    ["base lost contact with the ground", counts.lostContact],
+    ["factor of safety at its cap", counts.capped],
+    ["a value taken at its physical limit", counts.outOfRange],
+  ];
+  const seen = kinds.filter(([, count]) => count > 0);
+  const among = Object.entries(limitStates).flatMap(([name, { monteCarlo }]) =>
+    monteCarlo.probabilityAmongStable === undefined
+      ? []
+      : [`${limitStateName(name)} ${probabilityText(monteCarlo.probabilityAmongStable)}`],
   );
-}
-
-/** z_w as z with a small w below: escaped first, so nothing but our own marks is markup. */
-export function withSubscripts(text: string): string {
-  return escapeHtml(text).replace(/_([A-Za-z0-9′γ]+(?:,[A-Za-z0-9]+)?)/g, "<sub>$1</sub>");
-}
-
-function sheetTable(sheet: readonly SheetLine[], display: Display): string {
-  let block = "";
-  const rows = sheet.map((line) => {
-    const head =
-      line.heading === block
-        ? ""
-        : `<tr class="block"><th colspan="4" scope="rowgroup">${escapeHtml(line.heading)}</th></tr>`;
-    block = line.heading;
-    const value = line.unit === "–" ? threeFigures(line.value) : display.quantity(line.value, line.unit);
-    const source = line.source === undefined ? "" : ` <span class="words">(${escapeHtml(line.source)})</span>`;
-    const numbers =
-      line.substituted === "" || line.substituted === line.formula ? "" : `<br>= ${escapeHtml(line.substituted)}`;
-    return `${head}<tr><td class="formula">${withSubscripts(line.symbol)}</td><td>${escapeHtml(line.text)}${source}</td><td class="formula">${withSubscripts(line.formula)}${numbers}</td><td class="n">${escapeHtml(value)}</td></tr>`;
-  });
-  return `<div class="scroll"><table><thead><tr><th scope="col">Symbol</th><th scope="col">What it is</th><th scope="col">Formula and numbers</th><th scope="col" class="n">Result</th></tr></thead><tbody>${rows.join("")}</tbody></table></div>`;
+  if (seen.length === 0) return "";
+  const table = htmlTable(
+    [{ heading: "Samples with" }, { heading: "Count", numeric: true }, { heading: "of all samples", numeric: true }],
+    seen.map(([words, count]) => [words, grouped(count), probabilityText(count / samples)]),
+    { caption: "Samples for which a formula had to be stretched; they count as their factor says." },
+  );
+  return among.length === 0
+    ? table
+    : `${table}${paragraph(`Probability among the samples with a stable slope: ${among.join("; ")}.`, "quiet")}`;
 }

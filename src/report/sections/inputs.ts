@@ -1,106 +1,129 @@
-import type { ReportInput, VariableSummary } from "../../results.ts";
+import type { AssessResult, ReportInput, VariableSummary } from "../../results.ts";
 import { quantitiesOf } from "../../study/quantities.ts";
+import type { Study } from "../../study/study.ts";
 import { displayUnit } from "../../study/units.ts";
-import type { Display } from "../display.ts";
-import { htmlTable, paragraph, section } from "../markup.ts";
-import { significant, threeFigures } from "../number.ts";
-import { palette, withVariables } from "../palette.ts";
+import { densityPicture } from "../charts/density-picture.ts";
+import { capitalised, type Display } from "../display.ts";
+import { escapeHtml } from "../escape.ts";
+import { type Cell, htmlTable, type PageSection, paragraph, section } from "../markup.ts";
+import { shareText, significant, threeFigures } from "../number.ts";
 
 /** Everything that was put in: the uncertain values with their spread and a small picture, then the certain ones. */
-export function inputsSection({ assess, study }: ReportInput, display: Display): string {
-  const rows = assess.variables.map((variable) => {
-    const extra =
-      variable.parent === undefined
-        ? ""
-        : ` (before the cut: ${display.number(variable.parent.mean, variable.unit)} ± ${display.number(variable.parent.sd, variable.unit)})`;
-    return [
-      variable.label,
-      display.unit(variable.unit),
-      variable.distribution.replace("_", " ") + (variable.yearly ? ", of one year" : "") + extra,
-      display.number(variable.mean, variable.unit),
-      display.number(variable.sd, variable.unit),
-      display.number(variable.fractile5, variable.unit),
-      display.number(variable.fractile95, variable.unit),
-      `${Math.round(variable.knowledge * 100)} %`,
-      { html: densityPicture(variable) },
-      variable.source ?? "",
-    ];
-  });
-  const uncertain = new Set(assess.variables.map((variable) => variable.path));
-  const certain = quantitiesOf(study).filter(
-    ({ path, quantity }) => typeof quantity === "number" && !uncertain.has(path),
-  );
-  const fixedRows = certain.map(({ path, quantity, label, field }) => {
-    const { unit, factor } = displayUnit(field.dimension, study.units);
-    return [
-      label,
-      { html: `<code>${displayPath(path)}</code>` },
-      `${threeFigures((quantity as number) * factor)}${unit === "–" ? "" : unit === "°" ? "°" : ` ${unit}`}`,
-      study.sources[path] ?? "",
-    ];
-  });
-  const pairs = study.correlations.map(({ between: [a, b], coefficient }) => [
-    labelOf(assess.variables, a),
-    labelOf(assess.variables, b),
-    significant(coefficient, 2),
-  ]);
+export function inputsSection({ assess, study }: ReportInput, display: Display): PageSection {
   return section(
     "inputs",
     "What was put in",
-    rows.length === 0
-      ? paragraph("Nothing in the study is uncertain.")
-      : htmlTable(
-          [
-            { heading: "Uncertain value" },
-            { heading: "Unit" },
-            { heading: "Distribution" },
-            { heading: "Mean", numeric: true },
-            { heading: "Sd", numeric: true },
-            { heading: "5 %", numeric: true },
-            { heading: "95 %", numeric: true },
-            { heading: "Could be learned", numeric: true },
-            { heading: "Density" },
-            { heading: "Source" },
-          ],
-          rows,
-        ),
-    ...(pairs.length === 0
-      ? []
-      : [
-          htmlTable(
-            [{ heading: "Vary together" }, { heading: "with" }, { heading: "Correlation", numeric: true }],
-            pairs,
-          ),
-        ]),
-    htmlTable(
-      [
-        { heading: "Certain value" },
-        { heading: "Path in the study" },
-        { heading: "Value", numeric: true },
-        { heading: "Source" },
-      ],
-      fixedRows,
-    ),
+    assess.variables.length === 0 ? paragraph("Nothing in the study is uncertain.") : uncertainTable(assess, display),
+    correlationTable(study, assess.variables),
+    modelWords(study),
+    certainTable(study, assess),
   );
 }
 
-const displayPath = (path: string): string => path.replace(/[^A-Za-z0-9_.-]/g, (sign) => `&#${sign.charCodeAt(0)};`);
-const labelOf = (variables: readonly VariableSummary[], path: string): string =>
-  variables.find((variable) => variable.path === path)?.label ?? path;
+function uncertainTable({ variables }: AssessResult, display: Display): string {
+  const rows = variables.map((variable): readonly Cell[] => {
+    const number = (value: number): string => display.number(value, variable.unit);
+    return [
+      { html: `${escapeHtml(variable.label)}${sourceHtml(variable)}` },
+      display.unit(variable.unit),
+      distributionWords(variable, display),
+      number(variable.mean),
+      number(variable.sd),
+      number(variable.fractile5),
+      number(variable.fractile95),
+      { html: densityPicture(variable) },
+      shareText(variable.knowledge),
+    ];
+  });
+  return htmlTable(
+    [
+      { heading: "Uncertain value" },
+      { heading: "Unit" },
+      { heading: "Distribution" },
+      { heading: "Mean", numeric: true },
+      { heading: "Standard deviation", numeric: true },
+      { heading: "5 %", numeric: true },
+      { heading: "95 %", numeric: true },
+      { heading: "Density" },
+      { heading: "Could be learned", numeric: true },
+    ],
+    rows,
+    { caption: "Where a value comes from stands under its name, as the study gives it." },
+  );
+}
 
-/** The density as a small filled curve; measured values as ticks under it. */
-export function densityPicture({ density, ticks }: Pick<VariableSummary, "density" | "ticks">): string {
-  const { x, y } = density;
-  const [low, high, top] = [x[0], x[x.length - 1], Math.max(...y.filter(Number.isFinite), 1e-300)];
-  const px = (value: number): number => 1 + (108 * (value - low)) / (high - low || 1);
-  const points = x.map((value, k) => `${px(value).toFixed(1)},${(22 - (20 * Math.min(y[k], top)) / top).toFixed(1)}`);
-  const marks = (ticks ?? [])
-    .map(
-      (tick) =>
-        `<line x1="${px(tick).toFixed(1)}" x2="${px(tick).toFixed(1)}" y1="22" y2="26" stroke="${palette.ink}"/>`,
-    )
-    .join("");
-  return withVariables(
-    `<svg class="density" viewBox="0 0 110 26" aria-hidden="true"><polygon points="1,22 ${points.join(" ")} 109,22" fill="${palette.soft}" stroke="${palette.main}"/>${marks}</svg>`,
+const sourceHtml = ({ source }: VariableSummary): string =>
+  source === undefined ? "" : `<span class="words">${escapeHtml(source)}</span>`;
+
+/** Words of the study file, and what they leave unsaid. */
+function distributionWords(variable: VariableSummary, display: Display): string {
+  const words = [variable.distribution.replaceAll("_", " ")];
+  if (variable.ticks !== undefined) words.push(`${variable.ticks.length} values`);
+  if (variable.yearly) words.push("largest of one year");
+  if (variable.parent !== undefined)
+    words.push(
+      `before the cut ${display.number(variable.parent.mean, variable.unit)} ± ${display.number(variable.parent.sd, variable.unit)}`,
+    );
+  return words.join(", ");
+}
+
+function correlationTable({ correlations }: Study, variables: readonly VariableSummary[]): string {
+  if (correlations.length === 0) return "";
+  const label = (path: string): string => variables.find((variable) => variable.path === path)?.label ?? path;
+  return htmlTable(
+    [{ heading: "Vary together" }, { heading: "with" }, { heading: "Correlation", numeric: true }],
+    correlations.map(({ between: [a, b], coefficient }) => [label(a), label(b), significant(coefficient, 2)]),
+  );
+}
+
+const modelNames: Readonly<Record<string, string>> = {
+  rankine: "Rankine",
+  coulomb: "Coulomb",
+  at_rest: "at rest",
+  vesic: "Vesić",
+  en1997: "EN 1997-1, Annex D",
+  meyerhof: "Meyerhof",
+};
+
+/** How the engine was told to compute. */
+function modelWords({ model, water }: Study): string {
+  const name = (key: string): string => modelNames[key] ?? key;
+  const words = [
+    `earth pressure ${name(model.earthPressure)}`,
+    `bearing capacity ${name(model.bearing)}`,
+    water.behind === undefined && water.front === undefined
+      ? "dry ground"
+      : water.flow === "seepage"
+        ? "steady seepage around the base"
+        : "hydrostatic water",
+    model.tensionCrack === "water" ? "tension cracks filled with water" : "tension cracks dry",
+  ];
+  return paragraph(`Model: ${words.join("; ")}.`);
+}
+
+function certainTable(study: Study, { variables }: AssessResult): string {
+  const uncertain = new Set(variables.map((variable) => variable.path));
+  const rows = quantitiesOf(study).flatMap(({ path, quantity, label, field }): (readonly Cell[])[] => {
+    if (typeof quantity !== "number" || uncertain.has(path)) return [];
+    const { unit, factor } = displayUnit(field.dimension, study.units);
+    const shown = `${threeFigures(quantity * factor)}${unit === "–" ? "" : unit === "°" ? "°" : ` ${unit}`}`;
+    return [
+      [
+        { html: `${escapeHtml(capitalised(label))}` },
+        { html: `<code>${escapeHtml(path)}</code>` },
+        shown,
+        study.sources[path] ?? "",
+      ],
+    ];
+  });
+  return htmlTable(
+    [
+      { heading: "Certain value" },
+      { heading: "Path in the study" },
+      { heading: "Value", numeric: true },
+      { heading: "Source" },
+    ],
+    rows,
+    { caption: "Taken as certain, defaults included." },
   );
 }
