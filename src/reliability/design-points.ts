@@ -36,7 +36,7 @@ export interface DesignPointSearch {
   readonly evaluations: number;
 }
 
-const startsPerState = 3;
+const startsPerState = 5;
 
 /**
  * Design points of every limit state, from several starts: the origin, the middles of other segments where an unknown jumps, and
@@ -77,7 +77,7 @@ export function findDesignPoints(states: LimitStates, space: JointSpace, seed: s
 export const evaluationsOf = (states: LimitStates): number => states.evaluations.exact + states.evaluations.batched;
 
 /** The middle of a range of a standard normal by its probability. */
-function middleOf(from: number, to: number): number {
+export function middleOf(from: number, to: number): number {
   if (from + to < 0) return -middleOf(-to, -from);
   const beyond = to === Number.POSITIVE_INFINITY ? 0 : normalUpper(to);
   return normalUpperQuantile(0.5 * (normalUpper(from) + beyond));
