@@ -213,3 +213,52 @@ function descend(margins: Margins, z: Point, margin: number, gradient: Point, ai
   const best = enough >= 0 ? enough : merits.indexOf(Math.min(...merits));
   return { point: trials[best], margin: values[best], stalled: best > 0 };
 }
+
+/**
+ * A smooth design point to more digits, by central differences. Each step is as long as the two before it say: longer where they
+ * creep, shorter where they swing to and fro.
+ *
+ * @returns the point whose next step is the shortest, with its gradient
+ */
+export function refineSmoothPoint(
+  margins: Margins,
+  found: { readonly point: Point; readonly gradient: Point },
+): { readonly point: Point; readonly gradient: Point } {
+  let best = found;
+  let shortest = Number.POSITIVE_INFINITY;
+  let point = found.point;
+  let share = 1;
+  let before: Point | undefined;
+  for (let round = 0; round < 20; round++) {
+    const gradient = centralGradient(margins, point);
+    const [margin] = margins([point]);
+    const step = scaled(gradient, (dot(gradient, point) - margin) / dot(gradient, gradient)).map(
+      (value, i) => value - point[i],
+    );
+    const length = norm(step);
+    if (length < shortest) {
+      shortest = length;
+      best = { point, gradient };
+    }
+    if (!(length > 1e-9 && length < 1)) break;
+    if (before !== undefined)
+      share = Math.min(Math.max(share / Math.max(1 - dot(step, before) / dot(before, before), 0.1), 0.01), 5);
+    point = point.map((value, i) => value + share * step[i]);
+    before = step;
+  }
+  return best;
+}
+
+/** Central differences. */
+export function centralGradient(margins: Margins, z: Point): Point {
+  const step = 1e-4;
+  const points = Array.from(z, (_, j) => j).flatMap((j) =>
+    [step, -step].map((move) => {
+      const moved = z.slice();
+      moved[j] += move;
+      return moved;
+    }),
+  );
+  const values = margins(points);
+  return z.map((_, j) => (values[2 * j] - values[2 * j + 1]) / (2 * step));
+}

@@ -1,6 +1,6 @@
 import { fillNormals } from "../probability/streams.ts";
 import type { LimitStates } from "./limit-states.ts";
-import { cosine, marginOf, norm, type Point, type PointEvaluator, scaled } from "./point-evaluator.ts";
+import { cosine, norm, type Point, type PointEvaluator, scaled } from "./point-evaluator.ts";
 
 /** Points that look for failure far from the origin, with the factors of every limit state there. */
 export interface Exploration {
@@ -27,13 +27,11 @@ export function explore(states: LimitStates, evaluator: PointEvaluator, seed: st
 }
 
 const candidates = 12;
-const halvings = 4;
 
 /**
  * Starts for a search: failing points drawn back along their ray to the surface, the nearest first, in distinct directions.
  *
  * @param most how many at most
- * @param origin margin at the origin, above 0
  */
 export function startsFrom(
   exploration: Exploration,
@@ -42,19 +40,19 @@ export function startsFrom(
   most: number,
 ): readonly Point[] {
   const factor = exploration.factors[place];
-  const failing = exploration.points
-    .map((point, i) => ({ point, margin: marginOf(factor[i]) }))
-    .filter(({ margin }) => margin < 0)
-    .sort((a, b) => norm(a.point) - norm(b.point) || a.margin - b.margin)
-    .slice(0, candidates)
-    .map(({ point }) => point);
-  const drawn = drawBack(margins, failing, halvings).sort((a, b) => norm(a) - norm(b));
-  const distinct: Point[] = [];
-  for (const point of drawn) {
-    if (distinct.length === most) break;
-    if (distinct.every((other) => cosine(other, point) < 0.7)) distinct.push(point);
+  const failing = exploration.points.filter((_, i) => factor[i] < 1).sort((a, b) => norm(a) - norm(b));
+  const drawn = drawBack(margins, distinct(failing, candidates), 4).sort((a, b) => norm(a) - norm(b));
+  return drawBack(margins, distinct(drawn, most), 6);
+}
+
+/** The first of the points in each direction, no two within 45 degrees of each other. */
+function distinct(points: readonly Point[], most: number): Point[] {
+  const kept: Point[] = [];
+  for (const point of points) {
+    if (kept.length === most) break;
+    if (kept.every((other) => cosine(other, point) < 0.7)) kept.push(point);
   }
-  return drawBack(margins, distinct, 6);
+  return kept;
 }
 
 /** Bisection along the rays from the origin, all points at once; the ends returned fail. */
