@@ -1,3 +1,4 @@
+import type { Notice } from "../study/study.ts";
 import { type Formula, loopOf } from "./columnwise.ts";
 import type {
   Coefficient,
@@ -47,6 +48,7 @@ export class KernelBuilder {
   readonly pressure: PressurePart[] = [];
   readonly limitStates: LimitStateSlots[] = [];
   readonly places: Record<string, Slot> = {};
+  readonly notes: ((columns: Columns) => readonly Notice[])[] = [];
   readonly loadPressure: ((columns: Columns, depth: number) => number)[] = [];
 
   constructor(fields: readonly InputField[]) {
@@ -167,6 +169,22 @@ export class KernelBuilder {
     return into;
   }
 
+  /** Inputs that vary, with their means as their columns have them. */
+  varyingInputs(): readonly { readonly slot: Slot; readonly mean: number }[] {
+    return this.#inputs
+      .filter((input) => input.fixed === undefined)
+      .map(({ path, slot, scale, lowest, highest }) => ({
+        slot,
+        mean: scale * Math.min(Math.max(this.meanOf(path), lowest), highest),
+      }));
+  }
+
+  /** Computes, in columns of one entry whose inputs are filled, what the given slots rest on. */
+  runBefore(wanted: readonly Slot[], columns: Columns): void {
+    for (const { from, into, value } of this.#coefficients) columns[into][0] = value(columns[from][0]);
+    for (const stage of stagesFor(this.#stages, wanted)) stage.run(columns, 1);
+  }
+
   step(
     heading: string,
     slot: Slot,
@@ -196,6 +214,7 @@ export class KernelBuilder {
       forces: this.forces,
       pressure: this.pressure,
       places: this.places,
+      notes: this.notes,
       loadPressure: this.loadPressure,
     };
   }
@@ -224,6 +243,18 @@ function formulaStage(name: string, formula: Formula, slots: readonly Slot[], in
       loop(k[into], count, k[a], k[b], k[c], k[d], k[e], k[f], k[g]);
     },
   };
+}
+
+/** The stages that the wanted slots rest on, in their order. */
+export function stagesFor(stages: readonly Stage[], wanted: readonly Slot[]): readonly Stage[] {
+  const needed = new Set(wanted);
+  const kept: Stage[] = [];
+  for (const stage of [...stages].reverse()) {
+    if (!stage.writes.some((slot) => needed.has(slot))) continue;
+    for (const slot of stage.reads) needed.add(slot);
+    kept.push(stage);
+  }
+  return kept.reverse();
 }
 
 /** Adds four columns at a time: one pass over the block for what would be four. */

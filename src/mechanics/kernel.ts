@@ -1,4 +1,4 @@
-import type { LimitStateName } from "../study/study.ts";
+import type { LimitStateName, Notice } from "../study/study.ts";
 
 /** One Float64Array per slot; the first n entries are valid. */
 export type Columns = readonly Float64Array[];
@@ -109,6 +109,8 @@ export interface Kernel {
   readonly pressure: readonly PressurePart[];
   /** Slots by name that reading out a result needs (base width, resultant, …). */
   readonly places: Readonly<Record<string, Slot>>;
+  /** Notes that only a run of its own can give, at the values of its first sample. */
+  readonly notes: readonly ((columns: Columns) => readonly Notice[])[];
   /** Formulas of the surface loads' pressure on the plane at a depth below its top, kPa, horizontal. */
   readonly loadPressure: readonly ((columns: Columns, depth: number) => number)[];
 }

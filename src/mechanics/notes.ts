@@ -25,7 +25,7 @@ export function mechanicsNotes(study: Study, kernel: Kernel, columns: Columns): 
     has: (path) => inputs.has(path),
   };
   const onWall = kernel.places.planeTop === kernel.places.crestLevel;
-  return notes(onWall).flatMap((note) => note(look) ?? []);
+  return [...notes(onWall).flatMap((note) => note(look) ?? []), ...kernel.notes.flatMap((note) => note(columns))];
 }
 
 function notes(onWall: boolean): readonly Note[] {

@@ -13,6 +13,7 @@ import type { Kernel, Slot } from "./kernel.ts";
 import { type InputField, KernelBuilder } from "./kernel-builder.ts";
 import { prepareBase } from "./stages/base.ts";
 import { prepareBearing } from "./stages/bearing.ts";
+import { prepareDeepSeated } from "./stages/deep-seated.ts";
 import { prepareCrack, preparePlaneParts, pressureAt } from "./stages/earth-pressure.ts";
 import { prepareEarthThrust, prepareSlopeMarks } from "./stages/earth-thrust.ts";
 import { prepareFrontGround, prepareFrontSurcharge, preparePassive } from "./stages/front.ts";
@@ -114,6 +115,7 @@ export function prepareWall(study: Study): Kernel {
   if (wanted.has("overturning")) prepareOverturning(b, base);
   if (wanted.has("bearing")) prepareBearing(b, study, base, below, ponds, prepareFrontSurcharge(b, front));
   if (wanted.has("eccentricity")) prepareEccentricity(b, o, base, study.assessment.eccentricityLimit ?? Number.NaN);
+  if (wanted.has("deep_seated")) prepareDeepSeated(b, study, o, layers, soilOf);
   b.limitStates.sort(
     (one, two) =>
       study.assessment.limitStates.indexOf(one.limitState) - study.assessment.limitStates.indexOf(two.limitState),

@@ -181,5 +181,16 @@ export function sectionOf(study: Study, kernel: Kernel, c: Columns): Section {
       at: value(`loads.lines.${place}.at`),
     })),
     undersideLevel: value("wall.underside_level"),
+    ...(places.circleRadius !== undefined && at("circleRadius") > 0
+      ? {
+          circle: {
+            x: at("circleX"),
+            z: at("circleZ"),
+            radius: at("circleRadius"),
+            entryX: at("circleEntryX"),
+            exitX: at("circleExitX"),
+          },
+        }
+      : {}),
   };
 }

@@ -36,6 +36,7 @@ const order = [
   "Overturning",
   "Bearing",
   "Eccentricity",
+  "Deep-seated failure",
 ];
 
 function rankOf(heading: string): number {

@@ -1,4 +1,5 @@
 import type { Columns, Kernel, Slot, Stage } from "./kernel.ts";
+import { stagesFor } from "./kernel-builder.ts";
 
 /** A kernel with columns of its own: made once, run as often as wanted, allocating nothing. */
 export interface Workspace {
@@ -50,14 +51,7 @@ export function createWorkspace(kernel: Kernel, capacity: number, wanted?: reado
 
 /** Stages that the wanted slots rest on, found from the last to the first; the marks always count. */
 export function neededStages(kernel: Kernel, wanted: readonly Slot[]): readonly Stage[] {
-  const needed = new Set([...wanted, kernel.marks]);
-  const kept: Stage[] = [];
-  for (const stage of [...kernel.stages].reverse()) {
-    if (!stage.writes.some((slot) => needed.has(slot))) continue;
-    for (const slot of stage.reads) needed.add(slot);
-    kept.push(stage);
-  }
-  return kept.reverse();
+  return stagesFor(kernel.stages, [...wanted, kernel.marks]);
 }
 
 /** Slots of the factors of safety: what sampling wants. */

@@ -12,14 +12,7 @@ export interface NotAvailable {
   readonly value?: string;
 }
 
-export const notAvailable: readonly NotAvailable[] = [
-  { path: "assessment.limit_states.*", value: "deep_seated" },
-  { path: "model.factors.deep_seated" },
-  { path: "ground.below.layers" },
-  { path: "ground.below.firm_level" },
-  { path: "evidence" },
-  { path: "decision" },
-];
+export const notAvailable: readonly NotAvailable[] = [{ path: "evidence" }, { path: "decision" }];
 
 /** A problem for each key or value of the tree that is on the list. */
 export function refuseNotAvailable(tree: unknown, list: readonly NotAvailable[], findings: Findings): void {

@@ -1,28 +1,12 @@
-import type { Notice } from "../../study/study.ts";
-import { factorCap } from "../kernel.ts";
-import type { CirclePlace, SlipCircle } from "./circle.ts";
-import { leftOut } from "./circle-factor.ts";
 import type { DeepSeatedGround } from "./ground.ts";
-import { defaultGrid, distinctValleys, lineEntries, type SearchGrid, type Valley } from "./mesh.ts";
-import { descend } from "./nelder-mead.ts";
-import { deepSeatedNotes } from "./notes.ts";
-import { factorAt, factorBelow, momentsAt, type Probe, probeOf } from "./probe.ts";
+import { defaultGrid, type SearchGrid } from "./mesh.ts";
+import { probeOf } from "./probe.ts";
+import { type DeepSeatedResult, resultOf } from "./result.ts";
 import { searchCircles } from "./search.ts";
 
-export interface DeepSeatedResult {
-  /** 0 … the cap; the cap where there is no circle or nothing drives. Without `model.factors.deep_seated`. */
-  readonly factor: number;
-  /** Moments about the centre of the critical circle, kNm/m; factor = resisting/driving below the cap. 0 without a circle. */
-  readonly resisting: number;
-  readonly driving: number;
-  /** The critical circle; absent where there is none. */
-  readonly circle?: Readonly<SlipCircle>;
-  /** The same in numbers that carry over to other samples, for deepSeatedNear. */
-  readonly place?: CirclePlace;
-  readonly notes: readonly Notice[];
-  /** Circles tried. */
-  readonly evaluations: number;
-}
+export type { DeepSeatedGround } from "./ground.ts";
+export { deepSeatedNear, knownPlaces } from "./near.ts";
+export type { DeepSeatedResult } from "./result.ts";
 
 /**
  * Deep-seated failure: the smallest factor of safety over all admissible circles, by Bishop's simplified method in the limit of
@@ -33,68 +17,4 @@ export interface DeepSeatedResult {
 export function deepSeated(ground: DeepSeatedGround, grid: SearchGrid = defaultGrid): DeepSeatedResult {
   const probe = probeOf(ground);
   return resultOf(ground, probe, searchCircles(probe, grid));
-}
-
-/**
- * The same from circles known beforehand (the valleys at the means, at design points, of a few samples) and their neighbours,
- * for sampling. Where none of them is allowed in this ground it searches in full.
- *
- * Its error, on the unsafe side but for that of a full search, over random walls with spreads as they are found in soil:
- * see tests/mechanics/deep-seated/near.test.ts.
- *
- * @param places of at least one circle; more make the error smaller
- */
-export function deepSeatedNear(ground: DeepSeatedGround, places: readonly CirclePlace[]): DeepSeatedResult {
-  const probe = probeOf(ground);
-  const lines = lineEntries(probe);
-  const known: Valley[] = [];
-  let bound = factorCap;
-  const look = (place: readonly number[]): void => {
-    const factor = factorBelow(probe, place, 1.15 * bound);
-    if (factor === leftOut) return;
-    bound = Math.min(bound, factor);
-    known.push({ place, factor });
-  };
-  for (const { entry, exit, depth } of places) {
-    look([entry, exit, depth]);
-    for (const line of lines) if (Math.abs(line - entry) < 0.25) look([line, exit, depth]);
-  }
-  if (known.length === 0) return resultOf(ground, probe, searchCircles(probe, defaultGrid));
-  const starts = distinctValleys(known).slice(0, nearStarts);
-  const ends = starts.map(({ place }): Valley => {
-    const end = descend((at) => factorAt(probe, at), place, nearSteps, 1e-5, nearCircles);
-    return { place: end.x, factor: end.value };
-  });
-  return resultOf(ground, probe, distinctValleys([...ends, ...known]));
-}
-
-/** Known circles whose neighbours are tried, the first steps to them (entry, exit, depth), and how many are tried from each. */
-const nearStarts = 3;
-const nearSteps = [0.08, 0.12, 0.2];
-const nearCircles = 30;
-
-/** Valleys of several grounds together, for deepSeatedNear: of the means, design points and some samples. */
-export function knownPlaces(grounds: readonly DeepSeatedGround[]): readonly CirclePlace[] {
-  const valleys = grounds.flatMap((ground) => searchCircles(probeOf(ground), defaultGrid));
-  return distinctValleys(valleys).map(({ place }) => ({ entry: place[0], exit: place[1], depth: place[2] }));
-}
-
-function resultOf(ground: DeepSeatedGround, probe: Probe, valleys: readonly Valley[]): DeepSeatedResult {
-  const { evaluations } = probe;
-  if (valleys.length === 0) {
-    const notes = deepSeatedNotes(ground, probe.limits, undefined);
-    return { factor: factorCap, resisting: 0, driving: 0, notes, evaluations };
-  }
-  const [valley] = valleys;
-  const moments = momentsAt(probe, valley.place, valley.factor);
-  const [entry, exit, depth] = Array.from(valley.place);
-  const circle = { ...probe.circle };
-  return {
-    factor: valley.factor,
-    ...moments,
-    circle,
-    place: { entry, exit, depth },
-    notes: deepSeatedNotes(ground, probe.limits, circle),
-    evaluations,
-  };
 }

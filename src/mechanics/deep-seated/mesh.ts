@@ -139,3 +139,17 @@ function isValley({ counts, factors }: Mesh, i: number, k: number, d: number, ax
       }
   return true;
 }
+
+/** The lowest nodes that lie at least three apart from one another in some direction: starts that the mesh is too coarse to show as valleys. */
+export function lowNodes({ counts, factors, places }: Mesh, most: number): readonly Valley[] {
+  const order = Array.from(factors.keys())
+    .filter((at) => factors[at] < leftOut)
+    .sort((one, other) => factors[one] - factors[other]);
+  const kept: (readonly [number, number, number, number])[] = [];
+  for (const at of order) {
+    if (kept.length === most) break;
+    const [d, k, i] = [at % counts[2], Math.floor(at / counts[2]) % counts[1], Math.floor(at / counts[2] / counts[1])];
+    if (kept.every(([, a, b, c]) => Math.abs(a - i) > 2 || Math.abs(b - k) > 2 || Math.abs(c - d) > 2)) kept.push([at, i, k, d]);
+  }
+  return kept.map(([at]) => ({ place: places.slice(3 * at, 3 * at + 3), factor: factors[at] }));
+}

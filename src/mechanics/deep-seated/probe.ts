@@ -44,7 +44,7 @@ export function factorBelow(probe: Probe, place: ArrayLike<number>, bound: numbe
   if (!circleAt(probe.limits, place, probe.circle)) return leftOut;
   layArc(probe.profile, probe.circle, probe.arc);
   probe.evaluations++;
-  return liesAbove(probe.arc, bound) ? leftOut : circleFactor(probe.arc, bound);
+  return liesAbove(probe.arc, bound) ? leftOut : circleFactor(probe.arc, probe.last);
 }
 
 /** Moments of the circle at a place at its factor. */

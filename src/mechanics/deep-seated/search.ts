@@ -1,5 +1,5 @@
 import { circleAt } from "./circle.ts";
-import { distinctValleys, layMesh, type SearchGrid, type Valley, valleysOf } from "./mesh.ts";
+import { distinctValleys, layMesh, type SearchGrid, lowNodes, type Valley, valleysOf } from "./mesh.ts";
 import { descend } from "./nelder-mead.ts";
 import { factorAt, type Probe } from "./probe.ts";
 
@@ -17,9 +17,8 @@ export function searchCircles(probe: Probe, grid: SearchGrid): readonly Valley[]
   if (inSpace.length === 0) return [];
   const steps = [1.5 / grid.entries, 1.5 / grid.exits, 0.5 / grid.depths];
   const worthwhile = (start: Valley): boolean => start.factor <= 1.3 * inSpace[0].factor;
-  const found = inSpace
+  const found = [...inSpace.slice(0, grid.starts), ...lowNodes(mesh, grid.starts)]
     .filter(worthwhile)
-    .slice(0, grid.starts)
     .map((start) => followDown(probe, start, steps));
   for (const { axis, index } of mesh.planes) {
     const onPlane = steps.map((step, i) => (i === axis ? 0 : step));

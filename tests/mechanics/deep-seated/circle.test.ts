@@ -2,9 +2,9 @@ import { expect, test } from "vitest";
 import { circleAt, type SlipCircle } from "../../../src/mechanics/deep-seated/circle.ts";
 import { circleLimits } from "../../../src/mechanics/deep-seated/circle-limits.ts";
 import { loweredFront, virtualTop } from "../../../src/mechanics/deep-seated/ground.ts";
+import { blankCircle as blank } from "./laid-circle.ts";
 import { dice, ordinaryGround, randomGround } from "./random-ground.ts";
 
-const blank = (): SlipCircle => ({ x: 0, z: 0, radius: 0, entryX: 0, entryZ: 0, exitX: 0, exitZ: 0 });
 const levelOf = (c: SlipCircle, x: number): number => c.z - Math.sqrt(c.radius ** 2 - (x - c.x) ** 2);
 
 test("every circle keeps to the rules, over 150 random walls and any place asked for", () => {

@@ -4,11 +4,6 @@ import { factorCap } from "../../../src/mechanics/kernel.ts";
 import { dice, drained, ordinaryGround, randomGround, undrained } from "./random-ground.ts";
 import { thinSlices } from "./thin-slices.ts";
 
-const messages = (ground: Parameters<typeof deepSeated>[0]): string =>
-  deepSeated(ground)
-    .notes.map(({ path, message }) => `${path}: ${message}`)
-    .join("\n");
-
 test("the critical circle of an ordinary wall, and its moments, are those of plain slices", () => {
   const ground = ordinaryGround();
   const found = deepSeated(ground);
@@ -28,7 +23,11 @@ test("without room between base and firm level the factor is the cap, with a not
     driving: 0,
     circle: undefined,
   });
-  expect(messages(ground)).toContain("no circle fits between the base and the firm level");
+  expect(
+    deepSeated(ground)
+      .notes.map(({ message }) => message)
+      .join(),
+  ).toContain("no circle fits between the base and the firm level");
 });
 
 test("ground in front as high as behind drives nothing: the cap", () => {
@@ -54,20 +53,6 @@ test("ground without any strength has the factor 0", () => {
     front: { ...ordinaryGround().front, soil: slurry },
   });
   expect(deepSeated(ground).factor).toBe(0);
-});
-
-test("notes say where the smallest lies at an end of the search, and that no crack is assumed", () => {
-  const deep = ordinaryGround({
-    behind: { slope: 0, layers: [{ soil: undrained(60) }] },
-    below: [{ soil: undrained(60), bottom: -5 }, { soil: undrained(5) }],
-    front: { level: 0, ignoreTop: 0, toeSoil: true, soil: undrained(60) },
-    water: {},
-  });
-  expect(messages(deep)).toContain("no tension crack");
-  expect(messages(deep)).toContain("the firm level that is assumed");
-  expect(messages({ ...deep, firmLevel: -5.5 })).not.toContain("the firm level that is assumed");
-  expect(messages({ ...deep, firmLevel: -60 })).toMatch(/farthest entry|farthest exit/);
-  expect(messages(ordinaryGround())).toBe("");
 });
 
 test("a weak seam below the base pulls the circle down to it", () => {

@@ -1,6 +1,7 @@
 import { expect, test } from "vitest";
-import { deepSeated, deepSeatedNear, knownPlaces } from "../../../src/mechanics/deep-seated/deep-seated.ts";
+import { deepSeated } from "../../../src/mechanics/deep-seated/deep-seated.ts";
 import type { DeepSeatedGround, DeepSeatedLayer } from "../../../src/mechanics/deep-seated/ground.ts";
+import { deepSeatedNear, knownPlaces } from "../../../src/mechanics/deep-seated/near.ts";
 import { dice, ordinaryGround, randomGround } from "./random-ground.ts";
 
 /** A sample around a ground: friction 10 %, cohesion 25 %, unit weight 5 %, loads 30 %, levels 0.1 h, boundaries 0.25 m (sd). */

@@ -1,7 +1,7 @@
 import { expect, test } from "vitest";
 import { deepSeated } from "../../../src/mechanics/deep-seated/deep-seated.ts";
 import type { DeepSeatedGround } from "../../../src/mechanics/deep-seated/ground.ts";
-import { defaultGrid, distinctValleys } from "../../../src/mechanics/deep-seated/mesh.ts";
+import { defaultGrid } from "../../../src/mechanics/deep-seated/mesh.ts";
 import { factorAt, probeOf } from "../../../src/mechanics/deep-seated/probe.ts";
 import { dice, drained, ordinaryGround, randomGround, undrained } from "./random-ground.ts";
 
@@ -57,13 +57,4 @@ test("no circle among 2000 drawn at random lies more than 0.5 % below what the s
 
 test("the same ground gives the same number, to the last digit", () => {
   expect(deepSeated(grounds.ordinary).factor).toBe(deepSeated(structuredClone(grounds.ordinary)).factor);
-});
-
-test("valleys that are all but the same place count once, the deeper one", () => {
-  const kept = distinctValleys([
-    { place: [1, 1, 1], factor: 1.2 },
-    { place: [1.01, 1.02, 1.1], factor: 1.1 },
-    { place: [2, 1, 1], factor: 1.5 },
-  ]);
-  expect(kept.map(({ factor }) => factor)).toEqual([1.1, 1.5]);
 });
