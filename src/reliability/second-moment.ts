@@ -42,6 +42,8 @@ export function oneAtATime(
  * The share of a variable is a_i Σ_j ρ_ij a_j / sd²: shares sum to 1, and one can be negative under correlation.
  *
  * @param correlation of the variables themselves, by place
+ * @param steps length of the step on either side, in standard deviations: 1 as defined above, a small one for the derivative at
+ *   the means
  * @returns one result per limit state
  * @source J. M. Duncan (2000), J. Geotech. Geoenviron. Eng. 126(4), 307–316
  */
@@ -49,16 +51,17 @@ export function firstOrderSecondMoment(
   states: LimitStates,
   space: JointSpace,
   correlation: (i: number, j: number) => number,
+  steps = 1,
 ): readonly SecondMomentResult[] {
   const rows = factorsAt(
     states,
     oneAtATime(space, (place) => {
       const { mean, sd } = space.unknowns[place].marginal;
-      return [mean - sd, mean + sd];
+      return [mean - steps * sd, mean + steps * sd];
     }),
   );
   return states.names.map((_, k) => {
-    const half = space.unknowns.map((_, place) => (rows[2 + 2 * place][k] - rows[1 + 2 * place][k]) / 2);
+    const half = space.unknowns.map((_, place) => (rows[2 + 2 * place][k] - rows[1 + 2 * place][k]) / (2 * steps));
     const along = half.map((_, i) => half.reduce((sum, aj, j) => sum + (i === j ? 1 : correlation(i, j)) * aj, 0));
     const variance = half.reduce((sum, ai, i) => sum + ai * along[i], 0);
     const shares = half.map((ai, i) => (variance > 0 ? (ai * along[i]) / variance : 0));
