@@ -32,10 +32,15 @@ export function textTable(columns: readonly Column[], rows: readonly (readonly s
   return [...lines.slice(0, headingLines), rule, ...lines.slice(headingLines)].join("\n");
 }
 
+/** The first column is broken down to so many letters before another is dropped. */
+const firstLeast = 24;
+
 function keptColumns(columns: readonly Column[], rows: readonly (readonly string[])[], width: number): number[] {
   const kept = columns.map((_, place) => place);
-  const sizeOf = (place: number): number =>
-    Math.max(lengthOf(columns[place].heading), ...rows.map((row) => lengthOf(row[place])));
+  const sizeOf = (place: number): number => {
+    const size = Math.max(lengthOf(columns[place].heading), ...rows.map((row) => lengthOf(row[place])));
+    return place === 0 ? Math.min(size, firstLeast) : size;
+  };
   const total = (): number => kept.reduce((sum, place) => sum + sizeOf(place) + 2, -2);
   while (total() > width) {
     const spare = kept.filter((place) => (columns[place].spare ?? 0) > 0);

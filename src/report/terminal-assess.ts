@@ -1,10 +1,30 @@
-import type { AssessResult, Driver, LimitStateAssessment, MonteCarloResult } from "../results.ts";
+import type { AssessResult, Driver, LimitStateAssessment, VariableSummary } from "../results.ts";
 import type { Study } from "../study/study.ts";
-import { capitalised, type Display, displayIn, limitStateWords } from "./display.ts";
-import { grouped, indexText, probabilityText, significant, threeFigures } from "./number.ts";
+import { type Display, displayIn, limitStateName, limitStateWords } from "./display.ts";
+import {
+  grouped,
+  indexText,
+  intervalText,
+  probabilityText,
+  shareText,
+  shiftText,
+  significant,
+  threeFigures,
+} from "./number.ts";
+import { sparkline } from "./sparkline.ts";
 import { textTable, wrap } from "./table.ts";
-import { closing, heading, type TerminalOptions } from "./terminal.ts";
-import { againstTarget, countedEstimate, estimateSentence, orList, wallEstimate } from "./wording.ts";
+import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe } from "./terminal.ts";
+import {
+  againstTarget,
+  countedEstimate,
+  type Estimate,
+  estimateSentence,
+  noneSeen,
+  orList,
+  periodSentence,
+  wallEstimate,
+  within,
+} from "./wording.ts";
 
 /** `toehold assess` for reading: one page of answers, or with `all` every method and measure. */
 export function terminalAssess(result: AssessResult, study: Study, options: TerminalOptions): string {
@@ -12,166 +32,223 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
   const blocks = [
     [heading(result.study, options), ...answer(result, options)],
     [probabilityTable(result, options)],
-    [heading("What drives it", options), driversText(result, options)],
+    [heading("What drives it", options), ...driversText(result, options)],
     ...(options.all
       ? Object.entries(result.limitStates).map(([name, state]) => everything(name, state, result, options))
       : []),
-    [heading("What was put in", options), variableTable(result, display, options)],
+    [
+      heading("What was put in", options),
+      variableTable(result, display, options),
+      ...variableNotes(result, display, options),
+    ],
     howComputed(result, options),
     [closing(result.warnings, result.cautions, options)],
   ];
-  return `${blocks.map((block) => block.join("\n")).join("\n\n")}\n`;
+  return terminalSafe(`${blocks.map((block) => block.join("\n")).join("\n\n")}\n`);
 }
 
 /** A sentence for the wall and one for each limit state, against the target where there is one. */
-function answer(result: AssessResult, { width }: TerminalOptions): string[] {
-  const whole = `The wall fails by ${orList(Object.keys(result.limitStates).map((name) => limitStateWords[name] ?? name))}: ${estimateSentence(wallEstimate(result))}.`;
+function answer(result: AssessResult, options: TerminalOptions): readonly string[] {
+  const how = orList(Object.keys(result.limitStates).map((name) => limitStateWords[name] ?? name));
+  const whole = `The wall fails by ${how}${within(result)}: ${estimateSentence(wallEstimate(result))}.`;
+  const year = result.system.period === undefined ? "" : " (in one year)";
   const each = Object.entries(result.limitStates).map(
-    ([name, state]) =>
-      `${capitalised(limitStateWords[name] ?? name)}: ${estimateSentence(countedEstimate(state.monteCarlo))}.`,
+    ([name, state]) => `${limitStateName(name)}${year}: ${estimateSentence(countedEstimate(state.monteCarlo))}.`,
   );
-  return [whole, ...each, ...againstTarget(result)].flatMap((sentence) => wrap(sentence, width, "  "));
+  const unfinished = result.run.complete
+    ? []
+    : [`Stopped before its end: this rests on the first ${grouped(result.run.sampling.evaluations)} samples.`];
+  return paragraphLines([...unfinished, whole, ...each, ...againstTarget(result), periodSentence(result)], options);
 }
 
 function probabilityTable(result: AssessResult, { width }: TerminalOptions): string {
-  const row = (name: string, factor: string, mc: MonteCarloResult): string[] => [
+  const row = (name: string, factor: string, estimate: Estimate): string[] => [
     name,
+    noneSeen(estimate) ? "none seen" : probabilityText(estimate.probability),
+    intervalText(estimate.interval),
+    indexText(estimate.reliabilityIndex),
     factor,
-    mc.failures === 0 ? "none seen" : probabilityText(mc.probability),
-    `${probabilityText(mc.interval[0])} to ${probabilityText(mc.interval[1])}`,
-    indexText(mc.reliabilityIndex),
-    grouped(mc.failures),
+    estimate.counted === undefined ? "" : grouped(estimate.counted.failures),
   ];
   const rows = Object.entries(result.limitStates).map(([name, state]) =>
-    row(capitalised(limitStateWords[name] ?? name), significant(state.factorAtMean, 3), state.monteCarlo),
+    row(limitStateName(name), significant(state.factorAtMean, 3), countedEstimate(state.monteCarlo)),
   );
-  rows.push(row("Any of these", "", result.system.monteCarlo));
+  rows.push(row("Any of these", "", countedEstimate(result.system.monteCarlo)));
+  if (result.system.period !== undefined) rows.push(row(`The wall${within(result)}`, "", wallEstimate(result)));
+  if (result.target !== undefined)
+    rows.push([
+      "Target",
+      probabilityText(result.target.probability),
+      "",
+      indexText(result.target.reliabilityIndex),
+      "",
+      "",
+    ]);
   return textTable(
     [
       { heading: "Limit state" },
-      { heading: "Factor at means", align: "right", spare: 2 },
       { heading: "Probability", align: "right" },
-      { heading: "95 % interval", align: "right" },
-      { heading: "Index", align: "right", spare: 1 },
-      { heading: "Failures", align: "right", spare: 3 },
+      { heading: "95 % interval", align: "right", spare: 1 },
+      { heading: "Index", align: "right", spare: 2 },
+      { heading: "Factor at means", align: "right", spare: 3 },
+      { heading: "Failures", align: "right", spare: 4 },
     ],
     rows,
     width,
   );
 }
 
+const labelsOf = ({ variables }: AssessResult): ((path: string) => string) => {
+  const labels = new Map(variables.map((variable) => [variable.path, variable.label]));
+  return (path) => labels.get(path) ?? path;
+};
+
 /** The strongest few of each limit state in words; the whole table with `all`. */
-function driversText(result: AssessResult, options: TerminalOptions): string {
-  const labels = new Map(result.variables.map((variable) => [variable.path, variable.label]));
-  const lines = Object.entries(result.limitStates).flatMap(([name, state]) => {
+function driversText(result: AssessResult, options: TerminalOptions): readonly string[] {
+  const label = labelsOf(result);
+  const lines = Object.entries(result.limitStates).map(([name, state]) => {
     const strongest = state.drivers.filter((driver) => (driver.share ?? 0) >= 0.05).slice(0, 4);
-    const words = strongest.map(
-      (driver) =>
-        `${labels.get(driver.path) ?? driver.path} ${Math.round((driver.share ?? 0) * 100)} %${adverse(driver)}`,
-    );
-    return wrap(
-      `${capitalised(limitStateWords[name] ?? name)}: ${words.length === 0 ? "nothing stands out" : words.join("; ")}.`,
-      options.width,
-      "  ",
-    );
+    const words = strongest.map((driver) => `${label(driver.path)} ${shareText(driver.share ?? 0)}${adverse(driver)}`);
+    return `${limitStateName(name)}: ${words.length === 0 ? "nothing stands out" : words.join("; ")}.`;
   });
-  return [
-    ...lines,
-    ...wrap("Shares are of the variance of the factor of safety (first-order second-moment).", options.width),
-  ].join("\n");
+  return paragraphLines(
+    [...lines, "Shares are of the variance of the factor of safety (first-order second-moment)."],
+    options,
+  );
 }
 
 const adverse = (driver: Driver): string => (driver.adverse === "unclear" ? "" : ` (${driver.adverse} values harm)`);
 
+/** Everything that was found about one limit state. */
 function everything(
   name: string,
   state: LimitStateAssessment,
   result: AssessResult,
   options: TerminalOptions,
-): string[] {
-  const labels = new Map(result.variables.map((variable) => [variable.path, variable.label]));
-  const moment = state.firstOrderSecondMoment;
-  const mc = state.monteCarlo;
-  const bars = new Map(state.tornado.map((bar) => [bar.path, bar]));
-  const rows = state.drivers.map((driver) => [
-    labels.get(driver.path) ?? driver.path,
-    driver.share === null ? "–" : `${(driver.share * 100).toFixed(1)} %`,
-    driver.shiftGivenFailure === null
-      ? "–"
-      : `${driver.shiftGivenFailure > 0 ? "+" : ""}${significant(driver.shiftGivenFailure, 2)}`,
-    driver.adverse,
-    significant(bars.get(driver.path)?.factorAt5 ?? Number.NaN, 3),
-    significant(bars.get(driver.path)?.factorAt95 ?? Number.NaN, 3),
-  ]);
+): readonly string[] {
   return [
-    heading(capitalised(limitStateWords[name] ?? name), options),
-    ...wrap(
-      `Factor of safety: ${significant(state.factorAtMean, 3)} at the means; ${mc.factorMean === null ? "no sample counts" : `mean ${significant(mc.factorMean, 3)}, standard deviation ${significant(mc.factorSd ?? 0, 3)} over the samples`}.`,
-      options.width,
-    ),
-    ...wrap(
-      `First-order second-moment: standard deviation ${significant(moment.sd, 3)}; index ${indexText(moment.reliabilityIndexNormal)} if the factor were normal (${probabilityText(moment.probabilityNormal)}), ${indexText(moment.reliabilityIndexLognormal)} if lognormal (${probabilityText(moment.probabilityLognormal)}). Sampling gives ${probabilityText(mc.probability)}.`,
-      options.width,
-    ),
+    heading(limitStateName(name), options),
+    ...paragraphLines(methodSentences(state), options),
     "",
-    textTable(
-      [
-        { heading: "Variable" },
-        { heading: "Share", align: "right" },
-        { heading: "Shift given failure, sd", align: "right", spare: 1 },
-        { heading: "Harmful end", spare: 2 },
-        { heading: "F at 5 %", align: "right", spare: 3 },
-        { heading: "F at 95 %", align: "right", spare: 3 },
-      ],
-      rows,
-      options.width,
-    ),
+    driverTable(state, result, options),
   ];
 }
 
-function variableTable(result: AssessResult, display: Display, { width }: TerminalOptions): string {
-  const rows = result.variables.map((variable) => {
-    const unit = display.unit(variable.unit);
+function methodSentences(state: LimitStateAssessment): readonly string[] {
+  const {
+    firstOrderSecondMoment: moment,
+    monteCarlo: mc,
+    firstOrderReliability: first,
+    secondOrderReliability: second,
+  } = state;
+  const both = (index: number | null, probability: number | null): string =>
+    `index ${indexText(index)}${probability === null ? "" : ` (${probabilityText(probability)})`}`;
+  const spread =
+    mc.factorMean === null || mc.factorSd === null
+      ? "no sample has a factor between the limits"
+      : `mean ${significant(mc.factorMean, 3)}, standard deviation ${significant(mc.factorSd, 3)} over the samples`;
+  return [
+    `Factor of safety: ${significant(state.factorAtMean, 3)} at the means; ${spread}.`,
+    `Sampling: ${both(mc.reliabilityIndex, mc.probability)}.`,
+    `First-order second-moment: standard deviation ${significant(moment.sd, 3)}; ${both(moment.reliabilityIndexNormal, moment.probabilityNormal)} if the factor were normal, ${both(moment.reliabilityIndexLognormal, moment.probabilityLognormal)} if lognormal.`,
+    ...(first === undefined
+      ? []
+      : [
+          `First-order reliability: ${both(first.reliabilityIndex, first.probability)}, ${first.converged ? first.status : `not converged (${first.status})`}.`,
+        ]),
+    ...(second === undefined
+      ? []
+      : [`Second-order reliability: ${both(second.reliabilityIndex, second.probability)}.`]),
+  ];
+}
+
+function driverTable(state: LimitStateAssessment, result: AssessResult, { width }: TerminalOptions): string {
+  const label = labelsOf(result);
+  const bars = new Map(state.tornado.map((bar) => [bar.path, bar]));
+  const rows = state.drivers.map((driver) => [
+    label(driver.path),
+    driver.share === null ? "–" : shareText(driver.share),
+    driver.shiftGivenFailure === null ? "–" : shiftText(driver.shiftGivenFailure),
+    driver.adverse === "unclear" ? "–" : driver.adverse,
+    significant(bars.get(driver.path)?.factorAt5 ?? Number.NaN, 3),
+    significant(bars.get(driver.path)?.factorAt95 ?? Number.NaN, 3),
+  ]);
+  return textTable(
+    [
+      { heading: "Variable" },
+      { heading: "Share", align: "right" },
+      { heading: "Shift given failure, sd", align: "right", spare: 1 },
+      { heading: "Harmful end", spare: 2 },
+      { heading: "F at 5 %", align: "right", spare: 3 },
+      { heading: "F at 95 %", align: "right", spare: 3 },
+    ],
+    rows,
+    width,
+  );
+}
+
+/** Every uncertain value: moments, fractiles, what part is knowledge, and its density as a row of blocks. */
+function variableTable({ variables }: AssessResult, display: Display, { width }: TerminalOptions): string {
+  if (variables.length === 0) return "Nothing in the study is uncertain.";
+  const rows = variables.map((variable) => {
+    const number = (value: number): string => display.number(value, variable.unit);
     return [
       variable.label,
-      unit,
-      variable.distribution.replace("_", " "),
-      display.number(variable.mean, variable.unit),
-      display.number(variable.sd, variable.unit),
-      display.number(variable.fractile5, variable.unit),
-      display.number(variable.fractile95, variable.unit),
-      `${Math.round(variable.knowledge * 100)} %`,
+      display.unit(variable.unit),
+      variable.distribution.replaceAll("_", " "),
+      number(variable.mean),
+      number(variable.sd),
+      number(variable.fractile5),
+      number(variable.fractile95),
+      shareText(variable.knowledge),
+      sparkline(variable.density),
     ];
   });
   return textTable(
     [
       { heading: "Variable" },
       { heading: "Unit" },
-      { heading: "Distribution", spare: 1 },
+      { heading: "Distribution", spare: 2 },
       { heading: "Mean", align: "right" },
       { heading: "Sd", align: "right" },
       { heading: "5 %", align: "right", spare: 3 },
       { heading: "95 %", align: "right", spare: 3 },
-      { heading: "Can be learned", align: "right", spare: 2 },
+      { heading: "Knowledge", align: "right", spare: 4 },
+      { heading: "Density", spare: 5 },
     ],
     rows,
     width,
   );
 }
 
-function howComputed(result: AssessResult, options: TerminalOptions): string[] {
+/** What a row of the table has no room for: moments before a cut, measured values, values of one year. */
+function variableNotes({ variables }: AssessResult, display: Display, options: TerminalOptions): readonly string[] {
+  const lines = variables.flatMap((variable) => noteOf(variable, display));
+  return lines.length === 0 ? [] : ["", ...paragraphLines(lines, options)];
+}
+
+function noteOf(variable: VariableSummary, display: Display): readonly string[] {
+  const quantity = (value: number): string => display.quantity(value, variable.unit);
+  const { parent, ticks, yearly, label } = variable;
+  return [
+    ...(parent === undefined
+      ? []
+      : [`${label}: mean ${quantity(parent.mean)} and sd ${quantity(parent.sd)} before the cut.`]),
+    ...(ticks === undefined ? [] : [`${label}: measured ${ticks.map(quantity).join(", ")}.`]),
+    ...(yearly ? [`${label}: the largest value of one year.`] : []),
+  ];
+}
+
+function howComputed(result: AssessResult, options: TerminalOptions): readonly string[] {
   const { run, system } = result;
   const seconds = run.sampling.seconds > 0 ? ` in ${threeFigures(run.sampling.seconds)} s` : "";
   const stop = run.complete ? "" : " Stopped by the user before the end.";
   return [
     heading("How it was computed", options),
     ...wrap(
-      `Plain Monte Carlo sampling, ${grouped(run.sampling.evaluations)} samples${seconds}, seed “${result.seed}”, 95 % Clopper–Pearson intervals.${stop}`,
+      `Plain Monte Carlo sampling, ${grouped(run.sampling.evaluations)} samples${seconds}, seed “${result.seed}”, 95 % Clopper–Pearson intervals.${stop} The probability of any of the limit states lies between ${probabilityText(system.bounds[0])} and ${probabilityText(system.bounds[1])}, whatever their dependence. toehold ${run.version}.`,
       options.width,
-    ),
-    ...wrap(
-      `The probability of any of the limit states lies between ${probabilityText(system.bounds[0])} and ${probabilityText(system.bounds[1])}, whatever their dependence. toehold ${run.version}.`,
-      options.width,
+      "  ",
     ),
   ];
 }

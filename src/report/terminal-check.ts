@@ -1,44 +1,34 @@
 import type { CheckResult, SheetLine } from "../results.ts";
 import type { Study } from "../study/study.ts";
-import { capitalised, type Display, displayIn, limitStateWords } from "./display.ts";
+import { type Display, displayIn, limitStateName, limitStateWords } from "./display.ts";
 import { significant, threeFigures } from "./number.ts";
+import { sheetBlocks } from "./sheet-blocks.ts";
 import { textTable, wrap } from "./table.ts";
-import { closing, heading, type TerminalOptions } from "./terminal.ts";
+import { closing, heading, leastWidth, paragraphLines, type TerminalOptions, terminalSafe } from "./terminal.ts";
+import { orList } from "./wording.ts";
 
 /** `toehold check` for reading: factors of safety, base, forces, the calculation, notes, cautions. */
 export function terminalCheck(result: CheckResult, study: Study, options: TerminalOptions): string {
   const display = displayIn(study.units);
-  return [
-    heading(result.study, options),
-    ...wrap(
-      `One calculation, with ${result.at === "mean" ? "every uncertain value at its mean" : `the uncertain values at: ${result.at}`}.`,
-      options.width,
-    ),
-    "",
-    factorTable(result, display, options),
-    "",
-    ...sentences(result, options),
-    "",
-    heading(
-      "Forces per metre run, about the tip of the toe".replace("metre", study.units === "us" ? "foot" : "metre"),
-      options,
-    ),
-    forceTable(result, display, options),
-    "",
-    heading("Base", options),
-    ...baseLines(result, display),
-    "",
-    heading("Calculation", options),
-    sheetText(result.sheet, display, options),
-    "",
-    closing(result.warnings, result.cautions, options),
-    "",
-  ].join("\n");
+  const run = study.units === "us" ? "foot" : "metre";
+  const blocks = [
+    [heading(result.study, options), ...paragraphLines([valuesSentence(result)], options)],
+    [factorTable(result, display, options)],
+    paragraphLines(verdicts(result), options),
+    [heading(`Forces per ${run} run, about the tip of the toe`, options), forceTable(result, display, options)],
+    [heading("Base", options), ...paragraphLines(baseSentences(result, display), options)],
+    [heading("Calculation", options) + sheetText(result.sheet, display, options)],
+    [closing(result.warnings, result.cautions, options)],
+  ];
+  return terminalSafe(`${blocks.map((block) => block.join("\n")).join("\n\n")}\n`);
 }
+
+const valuesSentence = ({ at }: CheckResult): string =>
+  `One calculation, with ${at === "mean" ? "every uncertain value at its mean" : `the uncertain values at: ${at}`}.`;
 
 function factorTable(result: CheckResult, display: Display, { width }: TerminalOptions): string {
   const rows = Object.entries(result.limitStates).map(([name, state]) => [
-    capitalised(limitStateWords[name] ?? name),
+    limitStateName(name),
     significant(state.factorOfSafety, 3),
     display.quantity(state.resisting, state.unit),
     display.quantity(state.driving, state.unit),
@@ -55,15 +45,20 @@ function factorTable(result: CheckResult, display: Display, { width }: TerminalO
   );
 }
 
-function sentences(result: CheckResult, { width }: TerminalOptions): string[] {
+function verdicts(result: CheckResult): readonly string[] {
   const failing = Object.entries(result.limitStates).filter(([, state]) => state.factorOfSafety < 1);
   const lost = result.marks.includes("lost_contact") ? ["The base has lost contact at these values."] : [];
-  const words = failing.map(([name]) => limitStateWords[name] ?? name);
+  const steep = result.marks.includes("slope_unstable")
+    ? ["The slope behind is steeper than its soil can bear at these values."]
+    : [];
   const verdict =
     failing.length === 0
       ? "At these values the calculation finds every factor above 1. That alone says nothing about how sure anyone is: `toehold assess` does."
-      : `At these values the wall fails by ${words.join(" and ")}.`;
-  return [...lost, verdict].flatMap((sentence) => wrap(sentence, width));
+      : `At these values the wall fails by ${orList(
+          failing.map(([name]) => limitStateWords[name] ?? name),
+          "and",
+        )}.`;
+  return [...lost, ...steep, verdict];
 }
 
 function forceTable(result: CheckResult, display: Display, { width }: TerminalOptions): string {
@@ -87,40 +82,46 @@ function forceTable(result: CheckResult, display: Display, { width }: TerminalOp
   );
 }
 
-function baseLines(result: CheckResult, display: Display): string[] {
-  const { base } = result;
-  const lines = [
-    `Vertical force N′ ${display.quantity(base.vertical, "kN/m")}, driving force E ${display.quantity(base.horizontal, "kN/m")}`,
+/** What arrives at the underside, and how it is spread there. */
+export function baseSentences({ base }: CheckResult, display: Display): readonly string[] {
+  const place =
+    base.resultantX === null || base.eccentricity === null
+      ? "The resultant misses the base."
+      : `The resultant passes ${display.quantity(base.resultantX, "m")} from the toe: eccentricity ${display.quantity(base.eccentricity, "m")}, effective width ${display.quantity(base.effectiveWidth, "m")}.`;
+  const pressures =
+    base.pressureToe === null || base.pressureHeel === null
+      ? []
+      : [
+          `Pressure under the toe ${display.quantity(base.pressureToe, "kPa")}, under the heel ${display.quantity(base.pressureHeel, "kPa")}.`,
+        ];
+  return [
+    `On the base act ${display.quantity(base.vertical, "kN/m")} vertically (less the uplift) and ${display.quantity(base.horizontal, "kN/m")} horizontally (without passive resistance).`,
+    place,
+    ...pressures,
   ];
-  if (base.resultantX !== null && base.eccentricity !== null)
-    lines.push(
-      `Resultant ${display.quantity(base.resultantX, "m")} from the toe, eccentricity ${display.quantity(base.eccentricity, "m")}, effective width ${display.quantity(base.effectiveWidth, "m")}`,
-    );
-  if (base.pressureToe !== null && base.pressureHeel !== null)
-    lines.push(
-      `Pressure under the base ${display.quantity(base.pressureToe, "kPa")} at the toe, ${display.quantity(base.pressureHeel, "kPa")} at the heel`,
-    );
-  return lines;
 }
 
 /** The calculation sheet, block by block: symbol = formula = numbers = result, and what it is. */
 export function sheetText(sheet: readonly SheetLine[], display: Display, options: TerminalOptions): string {
-  const lines: string[] = [];
-  let block = "";
-  for (const line of sheet) {
-    if (line.heading !== block) {
-      block = line.heading;
-      lines.push("", `  ${block}`);
-    }
-    const value = line.unit === "–" ? threeFigures(line.value) : display.quantity(line.value, line.unit);
-    const formula = [line.formula, ...(line.substituted === "" ? [] : [line.substituted])].join(" = ");
-    const source = line.source === undefined ? "" : ` [${line.source}]`;
-    lines.push(...wrap(`    ${line.symbol} = ${formula} = ${value}`, options.width, "        "));
-    lines.push(...wrap(`        ${line.text}${source}`, options.width, "        "));
-  }
+  const width = Math.max(options.width, leastWidth);
+  const lines = sheetBlocks(sheet).flatMap((block) => [
+    "",
+    ...wrap(`  ${block.heading}`, width, "    "),
+    ...block.lines.flatMap((line) => sheetLines(line, display, width)),
+  ]);
   const units =
     display.units === "us"
-      ? ["", "  Numbers put in are in m, kN and kPa; results are shown in the study's units."]
+      ? ["", ...wrap("  Numbers put in are in m, kN and kPa; results are in the study's units.", width, "  ")]
       : [];
-  return [...lines, ...units].join("\n");
+  return ["", ...lines.slice(1), ...units].join("\n");
+}
+
+function sheetLines(line: SheetLine, display: Display, width: number): readonly string[] {
+  const value = line.unit === "–" ? threeFigures(line.value) : display.quantity(line.value, line.unit);
+  const numbers = line.substituted === "" || line.substituted === line.formula ? "" : ` = ${line.substituted}`;
+  const source = line.source === undefined ? "" : ` [${line.source}]`;
+  return [
+    ...wrap(`    ${line.symbol} = ${line.formula}${numbers} = ${value}`, width, "        "),
+    ...wrap(`        ${line.text}${source}`, width, "        "),
+  ];
 }

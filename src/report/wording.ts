@@ -8,7 +8,7 @@ export interface Estimate {
   readonly interval: readonly [number, number];
   readonly reliabilityIndex: number | null;
   /** Failures among samples, where the estimate is a plain count. */
-  readonly counted?: { readonly failures: number; readonly samples: number };
+  readonly counted?: { readonly failures: number; readonly samples: number; readonly of?: "periods" };
 }
 
 export const countedEstimate = (mc: MonteCarloResult): Estimate => ({
@@ -18,11 +18,13 @@ export const countedEstimate = (mc: MonteCarloResult): Estimate => ({
   counted: { failures: mc.failures, samples: mc.samples },
 });
 
-/** What is known of the wall as a whole: the best estimate, and its count where it is a plain one. */
+/** What is known of the wall as a whole: over the period where the study has one, else its count or the best estimate. */
 export function wallEstimate({ bestEstimate, system }: AssessResult): Estimate {
   const { probability, interval, reliabilityIndex } = bestEstimate;
-  const plain = bestEstimate.method.startsWith("plain") && bestEstimate.years === undefined;
-  return plain ? countedEstimate(system.monteCarlo) : { probability, interval, reliabilityIndex };
+  if (!bestEstimate.method.startsWith("plain")) return { probability, interval, reliabilityIndex };
+  if (system.period === undefined) return countedEstimate(system.monteCarlo);
+  const { failures, periods } = system.period;
+  return { probability, interval, reliabilityIndex, counted: { failures, samples: periods, of: "periods" } };
 }
 
 export const noneSeen = ({ counted }: Estimate): boolean => counted !== undefined && counted.failures === 0;
@@ -33,11 +35,15 @@ export const allFailed = ({ counted }: Estimate): boolean =>
 export function estimateSentence(estimate: Estimate): string {
   const { probability, interval, counted } = estimate;
   if (counted?.failures === 0)
-    return `no failure in ${grouped(counted.samples)} samples, which shows only that it is rarer than ${oneIn(interval[1])} (upper end of the 95 % interval)`;
+    return `no failure in ${countText(counted)}, which shows only that it is rarer than ${oneIn(interval[1])} (upper end of the 95 % interval)`;
   if (counted !== undefined && counted.failures === counted.samples)
-    return `failure in every one of ${grouped(counted.samples)} samples`;
+    return `failure in every one of ${countText(counted)}`;
   return `about ${oneIn(probability)}; ${betweenText(interval)}`;
 }
+
+/** "131 072 samples". */
+export const countText = ({ samples, of }: NonNullable<Estimate["counted"]>): string =>
+  `${grouped(samples)} ${of ?? "samples"}`;
 
 /** One value of a table: "1 in 240", "none seen". */
 export const oneInCell = (estimate: Estimate): string =>
@@ -88,14 +94,18 @@ export function againstTarget(result: AssessResult): string[] {
   }
 }
 
+/** " within 50 years", where the study has yearly values. */
+export const within = ({ bestEstimate: { years } }: AssessResult): string =>
+  years === undefined ? "" : ` within ${yearsText(years)}`;
+
 /** What the probability is of: so many years, or the ground as it is. */
-export function periodSentence({ bestEstimate }: AssessResult): string {
-  return bestEstimate.years === undefined
-    ? "No value in the study is yearly: the probability holds for the ground as it is, and is not per year."
-    : `The probability of the wall is of ${yearsText(bestEstimate.years)}; those of the limit states are of one year.`;
+export function periodSentence({ bestEstimate: { years }, system }: AssessResult): string {
+  if (years === undefined)
+    return "No value in the study is yearly: the probability holds for the ground as it is, and is not per year.";
+  return `The probability of the wall is of ${yearsText(years)}, in any of which it may fail; in one year it is ${oneInCell(countedEstimate(system.monteCarlo))}, and the probabilities of the limit states are of one year too.`;
 }
 
-export const yearsText = (years: number): string => `${significant(years, 3)} ${years === 1 ? "year" : "years"}`;
+export const yearsText = (years: number): string => `${Number(years.toPrecision(4))} ${years === 1 ? "year" : "years"}`;
 
 /** "sliding, overturning or bearing failure". */
 export function orList(words: readonly string[], link = "or"): string {

@@ -34,7 +34,11 @@ const merged = (...parts: readonly Tree[]): Tree =>
       const before = out[key];
       const both = [before, value].every((side) => typeof side === "object" && side !== null && !Array.isArray(side));
       if (value === undefined) delete out[key];
-      else out[key] = both && !("normal" in (value as Tree)) && !("normal" in (before as Tree)) ? merged(before as Tree, value as Tree) : value;
+      else
+        out[key] =
+          both && !("normal" in (value as Tree)) && !("normal" in (before as Tree))
+            ? merged(before as Tree, value as Tree)
+            : value;
     }
     return out;
   }, {});

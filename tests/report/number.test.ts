@@ -1,12 +1,13 @@
 import { describe, expect, test } from "vitest";
 import {
-  estimateSentence,
+  betweenText,
   grouped,
   indexText,
   oneIn,
   probabilityText,
   scientific,
   shareText,
+  shiftText,
   significant,
   threeFigures,
 } from "../../src/report/number.ts";
@@ -21,7 +22,9 @@ describe("numbers as an engineer writes them", () => {
     [104.449, "104"],
     [0.04406, "0.0441"],
     [99.96, "100"],
-    [12_345.6, "12346"],
+    [12_345.6, "12 300"],
+    [1064, "1060"],
+    [-123_456, "−123 000"],
     [4.2e-7, "4.20 × 10⁻⁷"],
     [Number.NaN, "–"],
   ])("%d has three figures: %s", (value, text) => {
@@ -40,7 +43,11 @@ describe("numbers as an engineer writes them", () => {
     [0.0123, "1 in 81", "1.2 × 10⁻²"],
     [7.2e-5, "1 in 13 900", "7.2 × 10⁻⁵"],
     [0.25, "25 %", "0.25"],
-    [0.999, "nearly certain", "1.0"],
+    [0.999, "99.9 %", "above 0.99"],
+    [0.9999, "above 99.9 %", "above 0.99"],
+    [1, "100 %", "1"],
+    [2.5e-8, "1 in 40 000 000", "2.5 × 10⁻⁸"],
+    [2.5e-9, "1 in 4.0 × 10⁸", "2.5 × 10⁻⁹"],
     [1e-13, "below 1 in 10¹²", "below 10⁻¹²"],
     [0, "none seen", "0"],
   ])("a probability of %d is %s, and %s", (p, words, number) => {
@@ -62,15 +69,16 @@ describe("numbers as an engineer writes them", () => {
     expect(plain(shareText(1))).toBe("100 %");
   });
 
-  test("an estimate is a sentence with its interval; none seen never reads as safe", () => {
-    expect(
-      estimateSentence({ probability: 1 / 240, interval: [1 / 255, 1 / 225], failures: 400, samples: 96_000 }),
-    ).toBe("about 1 in 240; between 1 in 225 and 1 in 255");
-    expect(plain(estimateSentence({ probability: 0, interval: [0, 2.8e-5], failures: 0, samples: 131_072 }))).toBe(
-      "no failure in 131 072 samples, which shows only that it is rarer than 1 in 35 700",
-    );
-    expect(estimateSentence({ probability: 1, interval: [0.99, 1], failures: 500, samples: 500 })).toBe(
-      "failure in every one of 500 samples",
-    );
+  test("a range names the likelier end first, in per cent the smaller, and no end that is no finding", () => {
+    expect(plain(betweenText([1 / 255, 1 / 225]))).toBe("between 1 in 225 and 1 in 255");
+    expect(plain(betweenText([0.09, 0.12]))).toBe("between 9 % and 12 %");
+    expect(plain(betweenText([0, 2.8e-5]))).toBe("at most 1 in 35 700");
+    expect(plain(betweenText([0.9994, 1]))).toBe("between 99.9 % and 100 %");
+  });
+
+  test("a shift is given to a tenth of a standard deviation, with its sign", () => {
+    expect(shiftText(1.72)).toBe("+1.7");
+    expect(shiftText(-0.21)).toBe("−0.2");
+    expect(shiftText(-0.03)).toBe("0");
   });
 });

@@ -12,20 +12,22 @@ import {
   noneSeen,
   oneInCell,
   wallEstimate,
+  yearsText,
 } from "../wording.ts";
 import { decadeLabels, decades } from "./common.ts";
 
-/** Name of the row of the wall as a whole. */
-const whole = "The wall";
-
 /** Probability of each limit state and of the wall, with its interval, on a logarithmic axis, against the target. */
 export function probabilityChart(result: AssessResult): Chart {
+  const { period, monteCarlo: any } = result.system;
+  const year = period === undefined ? "" : ", one year";
+  const whole = period === undefined ? "The wall" : `The wall, ${yearsText(period.years)}`;
   const named: readonly { name: string; state: string; estimate: Estimate }[] = [
     ...Object.entries(result.limitStates).map(([state, { monteCarlo }]) => ({
-      name: limitStateName(state),
+      name: limitStateName(state) + year,
       state,
       estimate: countedEstimate(monteCarlo),
     })),
+    ...(period === undefined ? [] : [{ name: `Any${year}`, state: "any", estimate: countedEstimate(any) }]),
     { name: whole, state: "any", estimate: wallEstimate(result) },
   ];
   const seen = named.flatMap(({ estimate: { interval, probability } }) => [...interval, probability]);

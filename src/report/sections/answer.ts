@@ -1,6 +1,7 @@
 import type { AssessResult, ReportInput } from "../../results.ts";
 import { chartFigure } from "../chart-figure.ts";
 import { probabilityChart } from "../charts/probabilities.ts";
+import { yearlyRiskChart } from "../charts/yearly-risk.ts";
 import { limitStateName, limitStateWords } from "../display.ts";
 import { escapeHtml } from "../escape.ts";
 import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
@@ -9,6 +10,7 @@ import {
   againstTarget,
   allFailed,
   countedEstimate,
+  countText,
   type Estimate,
   estimateSentence,
   noneSeen,
@@ -17,6 +19,7 @@ import {
   periodSentence,
   standing,
   wallEstimate,
+  within,
 } from "../wording.ts";
 
 /** What the page is opened for: a sentence for the wall and one for each limit state, against the target. */
@@ -39,6 +42,12 @@ export async function answerSection({ assess }: ReportInput): Promise<PageSectio
     ),
     probabilityTable(assess),
     paragraph(periodSentence(assess), "quiet"),
+    assess.system.period === undefined
+      ? ""
+      : await chartFigure(
+          yearlyRiskChart(assess.system.period),
+          "A wall that has stood for years has shown part of its strength: what ground there is stays the same, only the yearly values are drawn anew.",
+        ),
   );
 }
 
@@ -54,22 +63,23 @@ function unfinished({ run }: AssessResult): string {
 /** The figure in large type, then what it is a figure of. */
 function answerSentence(assess: AssessResult): string {
   const estimate = wallEstimate(assess);
-  const how = orList(Object.keys(assess.limitStates).map((name) => limitStateWords[name] ?? name));
+  const how = `${orList(Object.keys(assess.limitStates).map((name) => limitStateWords[name] ?? name))}${within(assess)}`;
   const [big, rest] = answerParts(estimate, how);
   return `<p class="answer"><strong>${escapeHtml(big)}</strong> ${escapeHtml(rest)}</p>`;
 }
 
 function answerParts(estimate: Estimate, how: string): readonly [big: string, rest: string] {
   const { counted, interval, probability } = estimate;
+  const words = counted === undefined ? "" : countText(counted);
   if (noneSeen(estimate))
     return [
       "No failure seen",
-      `in ${grouped(counted?.samples ?? 0)} samples. That shows only that the probability that the wall fails by ${how} is below ${oneIn(interval[1])}, the upper end of the 95 % interval.`,
+      `in ${words}. That shows only that the probability that the wall fails by ${how} is below ${oneIn(interval[1])}, the upper end of the 95 % interval.`,
     ];
   if (allFailed(estimate))
     return [
       "Every sample failed:",
-      `the wall fails by ${how} in all of ${grouped(counted?.samples ?? 0)} samples, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
+      `the wall fails by ${how} in all of ${words}, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
     ];
   return [
     `About ${oneIn(probability)}`,
@@ -78,13 +88,15 @@ function answerParts(estimate: Estimate, how: string): readonly [big: string, re
 }
 
 /** One limit state in words, with its place against the target and what the first order adds where sampling saw nothing. */
-function stateSentence({ target }: AssessResult, estimate: Estimate, firstOrder: number | null): string {
+function stateSentence({ target, system }: AssessResult, estimate: Estimate, firstOrder: number | null): string {
   const places = {
     below: "; the whole interval lies below the target",
     above: "; the whole interval lies above the target",
     open: "; the target lies within the interval",
   };
-  const place = target === undefined ? "" : places[standing(estimate, target.probability)];
+  // A target of many years is no measure of one.
+  const place =
+    target === undefined || system.period !== undefined ? "" : places[standing(estimate, target.probability)];
   const beside =
     noneSeen(estimate) && firstOrder !== null ? `. A first-order estimate puts it at ${oneIn(firstOrder)}` : "";
   return `${estimateSentence(estimate)}${place}${beside}.`;
@@ -104,7 +116,8 @@ function probabilityTable(assess: AssessResult): string {
   const rows = states.map(([name, state]) =>
     row(limitStateName(name), significant(state.factorAtMean, 3), countedEstimate(state.monteCarlo)),
   );
-  rows.push(row("The wall", "", wallEstimate(assess)));
+  if (assess.system.period !== undefined) rows.push(row("Any of these", "", countedEstimate(assess.system.monteCarlo)));
+  rows.push(row(`The wall${within(assess)}`, "", wallEstimate(assess)));
   if (target !== undefined)
     rows.push([
       "Target",

@@ -4,6 +4,7 @@ import { escapeHtml } from "../escape.ts";
 import { htmlTable, type PageSection, paragraph, scrolling, section, subheading } from "../markup.ts";
 import { threeFigures } from "../number.ts";
 import { type SheetBlock, sheetBlocks } from "../sheet-blocks.ts";
+import { baseSentences } from "../terminal-check.ts";
 
 /** The stability calculation at the means: forces, base, and every step so that it can be followed by hand. */
 export function calculationSection({ check }: ReportInput, display: Display): PageSection {
@@ -12,7 +13,7 @@ export function calculationSection({ check }: ReportInput, display: Display): Pa
     "The calculation, step by step",
     subheading(`Forces at the means, per ${display.units === "us" ? "foot" : "metre"} run`),
     forceTable(check, display),
-    baseWords(check, display),
+    paragraph(baseSentences(check, display).join(" ")),
     subheading("Every step at the means"),
     paragraph(
       display.units === "us"
@@ -57,19 +58,6 @@ function forceTable({ forces }: CheckResult, display: Display): string {
         "Horizontal is positive towards the front, vertical downwards; x from the tip of the toe, z from the underside of the base.",
     },
   );
-}
-
-function baseWords({ base }: CheckResult, display: Display): string {
-  const sum = `On the base act ${display.quantity(base.vertical, "kN/m")} vertically (less the uplift) and ${display.quantity(base.horizontal, "kN/m")} horizontally (without passive resistance).`;
-  const place =
-    base.resultantX === null || base.eccentricity === null
-      ? " The resultant misses the base."
-      : ` The resultant passes ${display.quantity(base.resultantX, "m")} from the toe: eccentricity ${display.quantity(base.eccentricity, "m")}, effective width ${display.quantity(base.effectiveWidth, "m")}.`;
-  const pressures =
-    base.pressureToe === null || base.pressureHeel === null
-      ? ""
-      : ` Pressure under the toe ${display.quantity(base.pressureToe, "kPa")}, under the heel ${display.quantity(base.pressureHeel, "kPa")}.`;
-  return paragraph(sum + place + pressures);
 }
 
 /** z_w as z with a small w below: escaped first, so nothing but our own marks is markup. */
