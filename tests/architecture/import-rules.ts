@@ -50,12 +50,13 @@ const machineGlobals: readonly (readonly [string, RegExp])[] = [
 
 const roomOf = (file: string): string => (file.includes("/") ? file.slice(0, file.indexOf("/")) : "");
 
-function importsOf(text: string): readonly string[] {
+/** What a file imports, as written: static and dynamic, types too. */
+export function importsOf(text: string): readonly string[] {
   const code = withoutComments(text);
   return [...code.matchAll(/(?:\bfrom|\bimport)\s*\(?\s*"([^"]+)"/g)].map((match) => match[1]);
 }
 
-function withoutComments(text: string): string {
+export function withoutComments(text: string): string {
   return text.replace(/\/\*[\s\S]*?\*\//g, "").replace(/(^|\s)\/\/.*$/gm, "$1");
 }
 
@@ -66,7 +67,7 @@ function faultOf(file: string, room: string, target: string): string | undefined
       : undefined;
   }
   if (!target.endsWith(".ts")) return `${file}: imports ${target} without its ending .ts`;
-  const to = resolve(file, target);
+  const to = resolveImport(file, target);
   const toRoom = roomOf(to);
   if (room === "" || toRoom === room || toRoom === "numeric") return undefined;
   if (toRoom === "")
@@ -77,7 +78,7 @@ function faultOf(file: string, room: string, target: string): string | undefined
   return above[room].includes(toRoom) ? undefined : `${file}: ${room}/ must not import ${toRoom}/`;
 }
 
-function resolve(file: string, target: string): string {
+export function resolveImport(file: string, target: string): string {
   const parts = [...file.split("/").slice(0, -1)];
   for (const part of target.split("/")) {
     if (part === "..") parts.pop();
