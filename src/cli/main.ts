@@ -1,13 +1,18 @@
 import { Command } from "commander";
 import { version } from "../version.ts";
+import type { AddCommand } from "./command.ts";
 import { addAssess } from "./commands/assess.ts";
 import { addCheck } from "./commands/check.ts";
 import { addCompletion } from "./commands/completion.ts";
 import { addNew } from "./commands/new.ts";
 import { addReport } from "./commands/report.ts";
 import { addSchema } from "./commands/schema.ts";
-import { showFailure } from "./failure.ts";
+import { internalErrorText, showFailure } from "./failure.ts";
 import { exitCode, type Io } from "./io.ts";
+import { processIo } from "./process-io.ts";
+
+/** In the order of the help; a new command is one line here and one file beside the others. */
+const commands: readonly AddCommand[] = [addCheck, addAssess, addReport, addSchema, addNew, addCompletion];
 
 /** Runs one command line and returns its exit code. Nothing here ends the process. */
 export async function run(args: readonly string[], io: Io): Promise<number> {
@@ -22,20 +27,20 @@ export async function run(args: readonly string[], io: Io): Promise<number> {
     )
     .version(version)
     .exitOverride()
+    .configureHelp({ minWidthToWrap: 20 })
     .configureOutput({
       writeOut: (text) => io.out(text),
       writeErr: (text) => io.err(text),
       getOutHelpWidth: () => io.width,
       getErrHelpWidth: () => io.width,
     })
-    .showHelpAfterError("(add --help for the options)");
-  addCheck(program, io);
-  addAssess(program, io, end);
-  addReport(program, io, end);
-  addSchema(program, io);
-  addCompletion(program, io);
-  addNew(program, io);
-  for (const command of program.commands) command.exitOverride().copyInheritedSettings(program);
+    .showHelpAfterError("(add --help for the options)")
+    .addHelpText(
+      "after",
+      "\nStart here:\n  toehold new my-wall\n  toehold assess my-wall/study.yaml\n  toehold report my-wall/study.yaml -o my-wall.html",
+    );
+  for (const add of commands) add(program, io, end);
+  for (const command of program.commands) command.copyInheritedSettings(program);
   try {
     await program.parseAsync([...args], { from: "user" });
     return code;
@@ -46,29 +51,13 @@ export async function run(args: readonly string[], io: Io): Promise<number> {
 
 /** The process as a command line: its streams, Ctrl-C, exit code. */
 export async function main(): Promise<void> {
-  const { stdout, stderr, stdin, env } = process;
   const stop = new AbortController();
+  // The first Ctrl-C asks the run to stop and show what it has; a second one ends the process at once.
   process.once("SIGINT", () => stop.abort());
-  const noColour = env.NO_COLOR !== undefined && env.NO_COLOR !== "";
-  const io: Io = {
-    out: (text) => void stdout.write(text),
-    err: (text) => void stderr.write(text),
-    outIsTerminal: stdout.isTTY === true,
-    errIsTerminal: stderr.isTTY === true,
-    width: stdout.columns ?? 100,
-    colour: stdout.isTTY === true && !noColour && env.TERM !== "dumb",
-    signal: stop.signal,
-    clock: () => performance.now() / 1000,
-    async readStandardInput() {
-      stdin.setEncoding("utf8");
-      let text = "";
-      for await (const part of stdin) text += part;
-      return text;
-    },
-  };
-  // A reader that closes early (`| head`) ends the output, not the program's good name.
-  stdout.on("error", (error: NodeJS.ErrnoException) =>
-    process.exit(error.code === "EPIPE" ? exitCode.done : exitCode.internal),
-  );
+  const io = processIo(process, stop.signal);
+  process.once("uncaughtException", (error) => {
+    io.err(internalErrorText(error));
+    process.exit(exitCode.internal);
+  });
   process.exitCode = await run(process.argv.slice(2), io);
 }

@@ -7,6 +7,9 @@ export interface Progress {
 
 const silent: Progress = { update: () => undefined, stop: () => undefined };
 
+/** A run shorter than this, s, shows no bar. */
+const patience = 0.5;
+
 /** A bar on standard error, on a terminal alone, and only once a run turns out to be long. */
 export async function startProgress(io: Io, quiet: boolean): Promise<Progress> {
   if (quiet || !io.errIsTerminal) return silent;
@@ -14,7 +17,8 @@ export async function startProgress(io: Io, quiet: boolean): Promise<Progress> {
   const bar = new cliProgress.SingleBar(
     {
       format: "Sampling {bar} {percentage} % of at most {total} samples",
-      stream: process.stderr,
+      barsize: Math.max(10, Math.min(40, io.width - 50)),
+      stream: io.errStream,
       clearOnComplete: true,
       hideCursor: true,
     },
@@ -24,7 +28,7 @@ export async function startProgress(io: Io, quiet: boolean): Promise<Progress> {
   let shown = false;
   return {
     update(done, of) {
-      if (!shown && io.clock() - start < 0.5) return;
+      if (!shown && io.clock() - start < patience) return;
       if (shown) bar.update(done);
       else bar.start(of, done);
       shown = true;

@@ -1,14 +1,17 @@
 import { type Command, InvalidArgumentError, Option } from "commander";
-import { readStudy } from "../study/read-study.ts";
 import type { Study } from "../study/study.ts";
-import { type Io, readInput } from "./io.ts";
+import { readInput } from "./files.ts";
+import type { Io } from "./io.ts";
+
+/** Path and value, as on the command line. */
+export type Setting = readonly [path: string, value: string];
 
 /** Options that every command on a study takes. */
 export interface CommonOptions {
   readonly json?: boolean;
   readonly output?: string;
   readonly quiet?: boolean;
-  readonly set?: readonly (readonly [string, string])[];
+  readonly set?: readonly Setting[];
 }
 
 export interface SamplingOptions extends CommonOptions {
@@ -20,11 +23,20 @@ export interface SamplingOptions extends CommonOptions {
 }
 
 export function addCommonOptions(command: Command): Command {
-  return command
-    .option("--json", "print the result as JSON, and nothing else, on standard output")
-    .option("-o, --output <file>", "write the result to a file instead")
-    .option("--quiet", "print no more than is asked for")
-    .option("--set <path=value>", "set a value of the study before it is read; may be repeated", collectSetting, []);
+  return addSettings(
+    command
+      .option("--json", "print the result as JSON, and nothing else, on standard output")
+      .option("-o, --output <file>", "write the result to a file instead")
+      .option("--quiet", "print no more than is asked for"),
+  );
+}
+
+export function addSettings(command: Command): Command {
+  return command.option(
+    "--set <path=value>",
+    "set a value of the study before it is read; may be repeated",
+    collectSetting,
+  );
 }
 
 export function addSamplingOptions(command: Command): Command {
@@ -49,10 +61,7 @@ export function addSamplingOptions(command: Command): Command {
     );
 }
 
-function collectSetting(
-  text: string,
-  before: readonly (readonly [string, string])[],
-): readonly (readonly [string, string])[] {
+function collectSetting(text: string, before: readonly Setting[] = []): readonly Setting[] {
   const equals = text.indexOf("=");
   if (equals < 1) throw new InvalidArgumentError("write it as path=value, for example water.behind.level=1.2");
   return [...before, [text.slice(0, equals).trim(), text.slice(equals + 1).trim()]];
@@ -61,7 +70,7 @@ function collectSetting(
 export function wholeNumber(lowest: number, highest: number): (text: string) => number {
   return (text) => {
     const value = Number(text);
-    if (!Number.isInteger(value) || value < lowest || value > highest)
+    if (text.trim() === "" || !Number.isInteger(value) || value < lowest || value > highest)
       throw new InvalidArgumentError(`it must be a whole number from ${lowest} to ${highest}`);
     return value;
   };
@@ -85,7 +94,7 @@ export interface StudyInput {
 /** Keeps the text beside a failure, so that the message can show the line. */
 export class StudyTextError extends Error {
   readonly text: string;
-  /** For problems that do not name it themselves. */
+  /** Name of the file, where the problems were found after reading and have no place yet; empty otherwise. */
   readonly file: string;
   override readonly cause: unknown;
   constructor(cause: unknown, text: string, file = "") {
@@ -96,10 +105,11 @@ export class StudyTextError extends Error {
   }
 }
 
-export async function loadStudy(file: string, options: CommonOptions, io: Io): Promise<StudyInput> {
+export async function loadStudy(file: string, set: readonly Setting[], io: Io): Promise<StudyInput> {
   const text = await readInput(file, io);
+  const { readStudy } = await import("../study/read-study.ts");
   return withText(text, () => ({
-    study: readStudy(text, { file: file === "-" ? "standard input" : file, set: options.set ?? [] }),
+    study: readStudy(text, { file: file === "-" ? "standard input" : file, set }),
     text,
   }));
 }

@@ -1,30 +1,54 @@
 import type { Command } from "commander";
+import type { AssessResult } from "../../results.ts";
+import type { Study } from "../../study/study.ts";
 import { deliver } from "../deliver.ts";
-import { exitCode, type Io, writeOutput } from "../io.ts";
+import { refuseBadTarget, writeOutput } from "../files.ts";
+import { exitCode, type Io, UsageError } from "../io.ts";
 import { addSamplingOptions, loadStudy, type SamplingOptions, withText } from "../study-input.ts";
 import { runAssess } from "./assess.ts";
+
+const examples = `
+Examples:
+  toehold report wall.yaml -o wall.html
+  toehold report wall.yaml -o - > wall.html`;
 
 export function addReport(program: Command, io: Io, end: (code: number) => void): void {
   addSamplingOptions(program.command("report"))
     .argument("<study>", "study file, or - for standard input")
-    .description("All of it on one page that works offline and prints.")
-    .addHelpText("after", "\nExample:\n  toehold report wall.yaml -o wall.html")
+    .description("All of it on one page that works offline and prints (report.html where -o names no other file).")
+    .addHelpText("after", examples)
     .action(async (file: string, options: SamplingOptions) => {
-      const input = await loadStudy(file, options, io);
+      const target = options.output ?? "report.html";
+      if (target === "-" && options.json) throw new UsageError("-o - and --json both want standard output");
+      await refuseBadTarget(target, [file]);
+      const input = await loadStudy(file, options.set ?? [], io);
       const { check } = await import("../../check.ts");
       const { htmlReport } = await import("../../report/html-report.ts");
       const checked = withText(input.text, () => check(input.study), input.study.file);
       const assessed = await runAssess(input, options, io);
       const page = await htmlReport({ study: input.study, check: checked, assess: assessed });
-      const target = options.output ?? "report.html";
-      await writeOutput(target, page, [file]);
-      const { resultJson } = await import("../../report/result-json.ts");
-      if (options.json) io.out(resultJson(assessed));
-      else if (!options.quiet) {
-        const { terminalAssess } = await import("../../report/terminal-assess.ts");
-        await deliver(terminalAssess(assessed, input.study, { width: io.width, colour: io.colour }), {}, file, io);
-        io.out(`\nThe report is in ${target}: open it in a browser.\n`);
+      if (target === "-") io.out(page);
+      else {
+        await writeOutput(target, page, [file]);
+        await summary(assessed, input.study, target, options, io);
       }
       if (!assessed.run.complete) end(exitCode.stopped);
     });
+}
+
+async function summary(
+  result: AssessResult,
+  study: Study,
+  target: string,
+  options: SamplingOptions,
+  io: Io,
+): Promise<void> {
+  if (options.json) {
+    const { resultJson } = await import("../../report/result-json.ts");
+    return deliver(resultJson(result), { json: true }, [], io);
+  }
+  if (options.quiet) return;
+  const { terminalAssess } = await import("../../report/terminal-assess.ts");
+  await deliver(terminalAssess(result, study, { width: io.width, colour: io.colour }), {}, [], io);
+  io.out(`\nThe report is in ${target}: open it in a browser.\n`);
 }

@@ -10,8 +10,8 @@ export function addSchema(program: Command, io: Io): void {
     .option("--json", "it is JSON in any case")
     .option("--quiet", "print no more than is asked for")
     .addHelpText("after", "\nExample:\n  toehold schema -o toehold.schema.json")
-    .action(async (options: { readonly output?: string; readonly quiet?: boolean }) => {
+    .action(async (options: { readonly output?: string; readonly quiet?: boolean; readonly json?: boolean }) => {
       const { studyJsonSchema } = await import("../../study/json-schema.ts");
-      await deliver(`${JSON.stringify(studyJsonSchema(), null, 2)}\n`, options, "", io);
+      await deliver(JSON.stringify(studyJsonSchema(), null, 2), options, [], io);
     });
 }

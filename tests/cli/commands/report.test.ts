@@ -1,0 +1,59 @@
+import { readdir, readFile, writeFile } from "node:fs/promises";
+import { join } from "node:path";
+import { beforeEach, describe, expect, test } from "vitest";
+import { few, newFolder, runWith, yard } from "../fake-io.ts";
+
+let folder: string;
+beforeEach(() => {
+  folder = newFolder();
+});
+
+describe("toehold report", () => {
+  test("writes one page, prints the summary and says where the page is", async () => {
+    const page = join(folder, "page.html");
+    const ran = await runWith(["report", yard, "-o", page, ...few]);
+    expect(ran).toMatchObject({ code: 0, err: "" });
+    expect(ran.out).toContain("The wall fails by");
+    expect(ran.out).toContain(`The report is in ${page}: open it in a browser.`);
+    expect(await readFile(page, "utf8")).toMatch(/^<!doctype html>/);
+    expect(await readdir(folder)).toEqual(["page.html"]);
+  });
+
+  test("-o - puts the page, and nothing else, on standard output", async () => {
+    const ran = await runWith(["report", yard, "-o", "-", ...few]);
+    expect(ran).toMatchObject({ code: 0, err: "" });
+    expect(ran.out).toMatch(/^<!doctype html>[\s\S]*<\/html>\s*$/);
+  });
+
+  test("--quiet prints nothing, --json the assessment", async () => {
+    const page = join(folder, "page.html");
+    expect(await runWith(["report", yard, "-o", page, "--quiet", ...few])).toEqual({ code: 0, out: "", err: "" });
+    const ran = await runWith(["report", yard, "-o", page, "--json", ...few]);
+    expect(JSON.parse(ran.out)).toMatchObject({ kind: "assess" });
+  });
+
+  test("never writes over the study", async () => {
+    const study = join(folder, "own.yaml");
+    const text = await readFile(yard, "utf8");
+    await writeFile(study, text);
+    const ran = await runWith(["report", study, "-o", study, ...few]);
+    expect(ran).toMatchObject({ code: 2, out: "" });
+    expect(await readFile(study, "utf8")).toBe(text);
+  });
+
+  test("a place that cannot be written to is found before anything is computed", async () => {
+    const page = join(folder, "nowhere", "page.html");
+    const clock = (): number => {
+      throw new RangeError("the run began");
+    };
+    const ran = await runWith(["report", yard, "-o", page], { clock });
+    expect(ran).toMatchObject({ code: 2, out: "", err: `toehold: cannot write ${page}: no such file or folder\n` });
+  });
+
+  test("a wrong study writes no page", async () => {
+    const page = join(folder, "never.html");
+    const ran = await runWith(["report", yard, "--set", "wall.stem.height=-5", "-o", page]);
+    expect(ran).toMatchObject({ code: 1, out: "" });
+    expect(await readdir(folder)).toEqual([]);
+  });
+});
