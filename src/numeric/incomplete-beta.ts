@@ -4,8 +4,31 @@ import { findRisingRoot } from "./root.ts";
 /** xᵃ yᵇ/B(a, b) with y = 1 − x, by Stirling's formula and its error so that large a and b lose no digits. */
 function leadingTerm(x: number, y: number, a: number, b: number): number {
   const n = a + b;
-  const exponent = stirlingError(n) - stirlingError(a) - stirlingError(b) - deviance(a, n * x) - deviance(b, n * y);
-  return Math.sqrt((a / (2 * Math.PI)) * (b / n)) * Math.exp(exponent);
+  const known = shapeTerms(a, b);
+  return known.factor * Math.exp(known.exponent - deviance(a, n * x) - deviance(b, n * y));
+}
+
+interface ShapeTerms {
+  a: number;
+  b: number;
+  exponent: number;
+  factor: number;
+}
+
+/** What hangs on the shapes alone, kept for the last few pairs: a distribution asks for the same two again and again. */
+const kept: ShapeTerms[] = Array.from({ length: 8 }, () => ({ a: 0, b: 0, exponent: 0, factor: 0 }));
+let oldest = 0;
+
+function shapeTerms(a: number, b: number): ShapeTerms {
+  for (let k = 0; k < kept.length; k++) if (kept[k].a === a && kept[k].b === b) return kept[k];
+  const terms = kept[oldest];
+  oldest = (oldest + 1) % kept.length;
+  const n = a + b;
+  terms.a = a;
+  terms.b = b;
+  terms.exponent = stirlingError(n) - stirlingError(a) - stirlingError(b);
+  terms.factor = Math.sqrt((a / (2 * Math.PI)) * (b / n));
+  return terms;
 }
 
 /**
