@@ -50,6 +50,8 @@ function assessJob(options: Options, io: Io): Job<AssessResult> {
 export async function runAssess({ study, text }: StudyInput, options: SamplingOptions, io: Io): Promise<AssessResult> {
   if (options.method !== undefined && options.method !== "plain")
     throw new UsageError(`--method ${options.method} is not available in this version`);
+  if ((options.workers ?? 1) > 1 && options.quiet !== true)
+    io.err("toehold: this version samples on one thread; --workers changes nothing\n");
   const { assess } = await import("../../assess.ts");
   const progress = await startProgress(io, options.quiet === true);
   try {

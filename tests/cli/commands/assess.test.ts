@@ -90,4 +90,13 @@ describe("toehold assess", () => {
     expect(ran).toMatchObject({ code: 2, out: "" });
     expect(ran.err).toContain("--method subset is not available in this version");
   });
+
+  test("workers that are not there yet are told on standard error, and change no bit", async () => {
+    const ran = await runWith(["assess", yard, ...few, "--workers", "4"]);
+    expect(ran).toMatchObject({
+      code: 0,
+      err: "toehold: this version samples on one thread; --workers changes nothing\n",
+    });
+    expect(await runWith(["assess", yard, ...few, "--workers", "4", "--quiet"])).toMatchObject({ err: "" });
+  });
 });
