@@ -62,7 +62,8 @@ export const limitStateWords: Readonly<Record<string, string>> = {
   deep_seated: "deep-seated failure",
 };
 
-/** The same at the start of a line. */
-export const limitStateName = (name: string): string => capitalised(limitStateWords[name] ?? name);
+/** The same at the start of a line or over a column. */
+export const limitStateName = (name: string): string =>
+  name === "eccentricity" ? "Eccentricity" : capitalised(limitStateWords[name] ?? name);
 
 export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -49,7 +49,7 @@ export const pageScript = `"use strict";
   };
   if (rows.length > 1) {
     picker.append("Show");
-    const choices = [["", "all"], ...rows.map((row) => [row.dataset.state, row.querySelector("b").textContent.replace(":", "")])];
+    const choices = [["", "all"], ...rows.map((row) => [row.dataset.state, row.querySelector("b").textContent.replace(/[:,].*/, "")])];
     for (const [state, words] of choices) {
       const button = make("button", words, { type: "button", value: state, "aria-pressed": String(state === "") });
       button.addEventListener("click", () => pick(state));

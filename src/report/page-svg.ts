@@ -16,7 +16,7 @@ export function pageSvg(svg: string, chart: Pick<Chart, "title" | "alternative">
     .replace(/ aria-hidden="true"/g, "")
     .replace(/ (?:stroke-miterlimit="10"|xmlns:xlink="[^"]*"|version="1\.1"|opacity="1")/g, "")
     .replace(/<path class="background" d="M0,0h0v0h0Z"[^>]*\/>/g, "")
-    .replace(/<(path|line|rect)((?: [a-z-]+="[^"]*")*?) aria-label="([^"]*)"([^>]*?)\/>/g, markWithWords)
+    .replace(/<(path|line|rect)((?: [a-z0-9-]+="[^"]*")*?) aria-label="([^"]*)"([^>]*?)\/>/g, markWithWords)
     .replace(/ aria-label="[^"]*"/g, "")
     .replace(/^<svg /, `<svg role="img" aria-label="${words}" `);
   return withVariables(tidy);

@@ -6,6 +6,10 @@ import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
 import { chartWidth, labelRoom, labelsOf, mostRows } from "./common.ts";
 
+/** Unknowns with less than this in every limit state are left to the table, but for the first few. */
+const leastShare = 0.005;
+const fewestRows = 3;
+
 /** First-order shares of every variable, a column of bars for each limit state. */
 export function sharesChart(result: AssessResult): Chart {
   const labels = labelsOf(result);
@@ -15,7 +19,7 @@ export function sharesChart(result: AssessResult): Chart {
   const paths = result.variables
     .map((variable) => variable.path)
     .sort((a, b) => strength(b) - strength(a))
-    .slice(0, mostRows);
+    .filter((path, place) => place < mostRows && (place < fewestRows || strength(path) >= leastShare));
   const values = states.flatMap(([name], k) =>
     paths.map((path) => {
       const share = shareOf(path, k);

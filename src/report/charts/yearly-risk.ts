@@ -5,18 +5,21 @@ import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
 import { yearsText } from "../wording.ts";
 
-/** Probability of failing in each year of the period, given that the wall stood until then. */
-export function yearlyRiskChart({ years, yearlyGivenSurvival }: PeriodAssessment): Chart {
-  const known = yearlyGivenSurvival.flatMap((probability, k) =>
-    probability === null ? [] : [{ year: k + 1, probability }],
-  );
+/** So many failures a year make a bar of its own worth drawing; with fewer, years are taken together. */
+const failuresPerBar = 20;
+
+/** Probability of failing in each year of the period, given that the wall stood until then; the mean over years drawn together. */
+export function yearlyRiskChart({ years, failures, yearlyGivenSurvival }: PeriodAssessment): Chart {
+  const together =
+    [1, 2, 5, 10, 20, 50].find((run) => failures * run >= failuresPerBar * years && years / run <= 50) ?? 10;
+  const known = groups(yearlyGivenSurvival, together);
   const most = Math.max(...known.map((row) => row.probability), 1e-300);
   const power = most > 0.1 || most <= 1e-300 ? 0 : Math.floor(Math.log10(most));
   const values = known.map(({ year, probability }) => ({
     year,
     shown: probability / 10 ** power,
     tip: markWords(
-      `Year ${year}: ${probability === 0 ? "none seen" : oneIn(probability)}, given that it stood until then`,
+      `Year ${year}: ${probability === 0 ? "none seen" : `${oneIn(probability)} a year`}, given that it stood until then`,
     ),
   }));
   const [first, last] = [known[0], known.at(-1)];
@@ -26,7 +29,7 @@ export function yearlyRiskChart({ years, yearlyGivenSurvival }: PeriodAssessment
     alternative:
       first === undefined || last === undefined
         ? "No year is known."
-        : `In the first year ${probabilityText(first.probability)}, in year ${last.year} ${probabilityText(last.probability)}.`,
+        : `In year ${first.year} ${probabilityText(first.probability)} a year, in year ${last.year} ${probabilityText(last.probability)} a year.`,
     spec: {
       data: { values },
       height: 130,
@@ -35,6 +38,7 @@ export function yearlyRiskChart({ years, yearlyGivenSurvival }: PeriodAssessment
         x: {
           field: "year",
           type: "ordinal",
+          sort: null,
           axis: { title: "Year", labelAngle: 0, labelOverlap: true, grid: false, ticks: false },
         },
         y: {
@@ -46,4 +50,21 @@ export function yearlyRiskChart({ years, yearlyGivenSurvival }: PeriodAssessment
       },
     },
   };
+}
+
+interface YearRow {
+  /** "7", or "6 to 10". */
+  readonly year: string;
+  readonly probability: number;
+}
+
+function groups(yearly: readonly (number | null)[], together: number): readonly YearRow[] {
+  const rows: YearRow[] = [];
+  for (let from = 0; from < yearly.length; from += together) {
+    const part = yearly.slice(from, from + together).flatMap((probability) => probability ?? []);
+    if (part.length === 0) break;
+    const probability = part.reduce((sum, value) => sum + value, 0) / part.length;
+    rows.push({ year: part.length === 1 ? `${from + 1}` : `${from + 1} to ${from + part.length}`, probability });
+  }
+  return rows;
 }

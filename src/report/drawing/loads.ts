@@ -34,7 +34,9 @@ export function loads(s: Section, f: Frame, display: Display): string {
   const lift = (s.surcharge ?? 0) > 0 ? lifted : 0;
   if (s.surcharge !== undefined && s.surcharge > 0) {
     const from = s.plane === "wall_back" ? crest : s.baseWidth;
-    out.push(row(s, f, [from, f.right], display.quantity(s.surcharge, "kPa"), display, 0));
+    // Beside other loads its words stand at the edge, clear of theirs.
+    const shared = s.strips.length + s.lines.length > 0;
+    out.push(row(s, f, [from, f.right], display.quantity(s.surcharge, "kPa"), display, 0, shared));
   }
   for (const strip of s.strips) {
     const from = crest + strip.from;
@@ -53,6 +55,7 @@ function row(
   words: string,
   display: Display,
   lift: number,
+  atEdge = false,
 ): string {
   if (from >= f.right) return beyond(s, f, words, display.quantity(from - crestOf(s), "m"));
   const end = Math.min(to, f.right);
@@ -69,7 +72,9 @@ function row(
   return (
     arrows.join("") +
     line(f.x(from), top(from), f.x(end), top(end), red) +
-    label(f.x(middle), top(middle) - 6 - rise, words, 'text-anchor="middle"')
+    (atEdge
+      ? label(f.x(end), top(end) - 6, words, 'text-anchor="end"')
+      : label(f.x(middle), top(middle) - 6 - rise, words, 'text-anchor="middle"'))
   );
 }
 

@@ -24,6 +24,7 @@ import {
 
 /** What the page is opened for: a sentence for the wall and one for each limit state, against the target. */
 export async function answerSection({ assess }: ReportInput): Promise<PageSection> {
+  const year = assess.system.period === undefined ? "" : ", in one year";
   return section(
     "answer",
     "The answer",
@@ -33,7 +34,7 @@ export async function answerSection({ assess }: ReportInput): Promise<PageSectio
     `<ul class="states">${Object.entries(assess.limitStates)
       .map(
         ([name, state]) =>
-          `<li data-state="${name}"><b>${escapeHtml(limitStateName(name))}:</b> ${escapeHtml(stateSentence(assess, countedEstimate(state.monteCarlo), state.firstOrderReliability?.probability ?? null))}</li>`,
+          `<li data-state="${name}"><b>${escapeHtml(limitStateName(name))}${year}:</b> ${escapeHtml(stateSentence(assess, countedEstimate(state.monteCarlo), state.firstOrderReliability?.probability ?? null))}</li>`,
       )
       .join("")}</ul>`,
     await chartFigure(
@@ -78,8 +79,8 @@ function answerParts(estimate: Estimate, how: string): readonly [big: string, re
     ];
   if (allFailed(estimate))
     return [
-      "Every sample failed:",
-      `the wall fails by ${how} in all of ${words}, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
+      "Every sample failed",
+      `The wall fails by ${how} in all of ${words}, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
     ];
   return [
     `About ${oneIn(probability)}`,
