@@ -13,7 +13,7 @@ export interface SubsetEstimate extends SamplingEstimate {
 
 const runsTogether = 8;
 const mostRuns = 64;
-const chainsPerLevel = 100;
+const chainsPerLevel = 200;
 const chainLength = 10;
 /** Samples of one level. */
 export const samplesPerLevel: number = chainsPerLevel * chainLength;
@@ -23,7 +23,7 @@ const mostLevels = 12;
 const wantedAcceptance = 0.44;
 
 /**
- * Subset simulation of the system, on the least factor of safety, with 1000 samples a level and a tenth going on.
+ * Subset simulation of the system, on the least factor of safety, with 2000 samples a level and a tenth going on.
  *
  *   p = 0.1^m · P(F < 1 | level m)
  *
@@ -114,7 +114,7 @@ function createSubsetRun(
       if (within === size) return { probability: 0, levels: level, stalled: true };
       probability *= within / size;
       draw(level);
-      // of tied ones any hundred will do: they lie in the order they were drawn in
+      // of tied ones any will do: they lie in the order they were drawn in
       for (let c = 0; c < chainsPerLevel; c++) {
         const from = order[c];
         for (let j = 0; j < dimension; j++) next[j][c] = z[j][from];
