@@ -4,6 +4,7 @@ import { StudyError } from "./errors.ts";
 import { buildModel, type Model } from "./model.ts";
 import { normalUpperQuantile } from "./numeric/normal.ts";
 import { findRoot } from "./numeric/root.ts";
+import type { JointSpace } from "./probability/marginal.ts";
 import { estimateProbability } from "./reliability/quick-estimate.ts";
 import { factorsAt } from "./reliability/second-moment.ts";
 import type { SizePoint, SizeResult } from "./results-size.ts";
@@ -50,12 +51,15 @@ export async function size(study: Study, options: SizeOptions): Promise<SizeResu
   const values = spaced(first, first.points ?? count);
   const seconds = second === undefined ? [undefined] : spaced(second, second.points ?? count);
   let evaluations = 0;
+  let shared: JointSpace | undefined;
   const at = (value: number, other: number | undefined): SizePoint => {
     const changes = {
       [first.path]: value,
       ...(second === undefined || other === undefined ? {} : { [second.path]: other }),
     };
-    const model = buildModel(changed(study, changes));
+    // The unknowns are the same at every point, so the first wall's space and its tables serve all.
+    const model = buildModel(changed(study, changes), shared);
+    shared = model.space;
     const estimate = estimateProbability(model.states, model.space, {
       seed,
       precision: options.precision ?? 0.05,
@@ -167,7 +171,7 @@ function meetingTarget(points: readonly SizePoint[], target: number, at: (value:
   );
   if (crossing < 0) return { meetsTargetAt: null };
   const [before, after] = [points[crossing - 1], points[crossing]];
-  const root = findRoot((value) => height(at(value)), before.value, after.value, 1e-4 * (after.value - before.value));
+  const root = findRoot((value) => height(at(value)), before.value, after.value, 2e-3 * (after.value - before.value));
   return {
     meetsTargetAt: root.x,
     meetsTargetSide: height(after) < height(before) ? "above" : "below",

@@ -177,10 +177,20 @@ function hold(drive: Drive, x: Float64Array, n: number, strayed: Uint8Array): vo
   }
 }
 
+const knownValues = new WeakMap<Marginal, Float64Array>();
+
+/** x at the nodes of the tables: reckoned once for a marginal, however many walls share it. */
+function nodeValues(marginal: Marginal): Float64Array {
+  const known = knownValues.get(marginal);
+  if (known !== undefined) return known;
+  const values = tableNodes().map((u) => marginal.quantileOfNormal(u));
+  knownValues.set(marginal, values);
+  return values;
+}
+
 function makeTables(drive: Drive, columns: Columns): DriveTables {
   const { marginal, input } = drive;
-  const u = tableNodes();
-  const x = u.map((value) => drive.exactly(value));
+  const x = nodeValues(marginal).map((value) => input.scale * Math.min(Math.max(value, input.lowest), input.highest));
   const ends = drive.strays ? [marginal.normalOfQuantile(input.lowest), marginal.normalOfQuantile(input.highest)] : [];
   const broken = brokenCells([...marginal.kinks, ...marginal.jumps, ...ends]);
   const reach = [drive.exactly(-tableReach), drive.exactly(tableReach)];
@@ -189,13 +199,11 @@ function makeTables(drive: Drive, columns: Columns): DriveTables {
   return {
     broken,
     ...(marginal.kind === "normal" ? {} : { column: fitTable(x) }),
-    coefficients: drive.coefficients
-      .filter(smooth)
-      .map(({ value, into }) => ({
-        values: fitTable(x.map(value)),
-        into: columns[into],
-        exactly: (v) => value(drive.exactly(v)),
-      })),
+    coefficients: drive.coefficients.filter(smooth).map(({ value, into }) => ({
+      values: fitTable(x.map(value)),
+      into: columns[into],
+      exactly: (v) => value(drive.exactly(v)),
+    })),
     byFormula: drive.coefficients
       .filter((coefficient) => !smooth(coefficient))
       .map(({ value, into }) => ({ value, into: columns[into] })),

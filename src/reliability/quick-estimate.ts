@@ -7,9 +7,9 @@ import type { LimitStates } from "./limit-states.ts";
 import type { SamplingEstimate, SamplingOrder } from "./sampling-estimate.ts";
 
 /** Samples of the first look: failures that are common are counted, not searched for. */
-const look = 4096;
+const look = 2048;
 /** From this many failures in the look on, plain sampling is good enough for a curve. */
-const common = 160;
+const common = 80;
 
 /**
  * Probability that any limit state fails, at the least cost: counted where failures are common, sampled around the design points
