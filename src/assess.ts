@@ -1,14 +1,17 @@
 /** How likely is each failure, how sure are we, and which unknown drives it? */
+import { bestEstimateOf, plainEstimate, pointMethods } from "./assess-methods.ts";
 import { cautions } from "./cautions.ts";
 import { cautiousValues, driverTable } from "./drivers/driver-table.ts";
 import { failurePicture } from "./drivers/failure-picture.ts";
 import { tornado } from "./drivers/tornado.ts";
+import { StudyError } from "./errors.ts";
 import { mechanicsNotes } from "./mechanics/notes.ts";
 import { createWorkspace } from "./mechanics/workspace.ts";
 import { buildModel, type Model, unknownsOf } from "./model.ts";
 import { assessmentNotes } from "./notes.ts";
-import { normalUpperQuantile } from "./numeric/normal.ts";
 import { createBlockCounter, type SamplingPlan } from "./reliability/block-tally.ts";
+import { type DesignPointSearch, findDesignPoints } from "./reliability/design-points.ts";
+import { firstOrderResult } from "./reliability/first-order.ts";
 import { localRunner } from "./reliability/local-runner.ts";
 import {
   type BlockRunner,
@@ -19,11 +22,11 @@ import {
   monteCarloResult,
 } from "./reliability/monte-carlo.ts";
 import { type PeriodResult, periodProbability, yearlyGivenSurvival } from "./reliability/period.ts";
+import type { SamplingMethod } from "./reliability/sampling-estimate.ts";
 import { firstOrderSecondMoment } from "./reliability/second-moment.ts";
 import { systemBounds } from "./reliability/system-bounds.ts";
 import type {
   AssessResult,
-  BestEstimate,
   LimitStateAssessment,
   PeriodAssessment,
   SecondMomentResult,
@@ -40,6 +43,8 @@ export interface AssessOptions {
   readonly seed?: string;
   readonly samples?: number;
   readonly precision?: number;
+  /** Of the best estimate; chosen by the program where left out. */
+  readonly method?: SamplingMethod;
   readonly onProgress?: (done: number, of: number) => void;
   readonly signal?: AbortSignal;
   /** Counts blocks elsewhere, on workers; in this thread where absent. */
@@ -73,11 +78,28 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     ...(options.signal === undefined ? {} : { signal: options.signal }),
   });
   const period = await periodOf(model, seed, options, run.complete);
-  const seconds = (options.clock?.() ?? 0) - start;
+  const goOn = run.complete && (period?.complete ?? true) && options.signal?.aborted !== true;
+  const search = goOn ? findDesignPoints(states, space, seed) : undefined;
   const limitStates = Object.fromEntries(
-    states.names.map((name, k) => [name, limitStateAssessment(model, run, plan, k, secondMoment[k], bars[k])]),
+    states.names.map((name, k) => [
+      name,
+      {
+        ...limitStateAssessment(model, run, plan, k, secondMoment[k], bars[k]),
+        ...(search === undefined ? {} : pointMethods(model, search, k)),
+      },
+    ]),
   ) as Partial<Record<LimitStateName, LimitStateAssessment>>;
   const system = systemAssessment(model, run, limitStates, period);
+  const bestEstimate =
+    search === undefined
+      ? plainEstimate(study, system)
+      : bestEstimateOf(model, search, system, {
+          seed,
+          samples: options.samples ?? study.assessment.samples,
+          precision: options.precision ?? study.assessment.precision,
+          ...(options.method === undefined ? {} : { method: options.method }),
+        });
+  const seconds = (options.clock?.() ?? 0) - start;
   const variables = variableSummaries(study, unknownsOf(study, kernel), space);
   const columns = columnsAtMeans(model);
   const { target } = study.assessment;
@@ -88,7 +110,7 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     variables,
     limitStates,
     system,
-    bestEstimate: plainEstimate(study, system),
+    bestEstimate,
     ...(target === undefined ? {} : { target }),
     run: {
       version,
@@ -191,27 +213,6 @@ function periodAssessment(period: PeriodResult): PeriodAssessment {
   };
 }
 
-/** Of the period where there is one, of the ground as it is elsewhere. */
-function plainEstimate(study: Study, system: SystemAssessment): BestEstimate {
-  const { period } = system;
-  const { probability, standardError, interval } = period ?? system.monteCarlo;
-  const reliabilityIndex = probability > 0 && probability < 1 ? normalUpperQuantile(probability) : null;
-  const evaluations = period === undefined ? system.monteCarlo.samples : period.periods * period.years;
-  const { target } = study.assessment;
-  // Met only where the whole interval lies below the target: an unresolved tail is not a proof.
-  const meets = target === undefined ? {} : { meetsTarget: interval[1] <= target.probability };
-  return {
-    method: "plain",
-    probability,
-    standardError,
-    interval,
-    reliabilityIndex,
-    evaluations,
-    ...(period === undefined ? {} : { years: period.years }),
-    ...meets,
-  };
-}
-
 function columnsAtMeans(model: Model): readonly Float64Array[] {
   const workspace = createWorkspace(model.kernel, 1);
   const means = new Map(model.space.unknowns.map((unknown) => [unknown.path, unknown.marginal.mean]));
@@ -234,6 +235,28 @@ export function cautiousPoint(study: Study): {
   const bars = tornado(states, space);
   const lowest = moments.reduce((best, moment, k) => (moment.mean < moments[best].mean ? k : best), 0);
   return { name: "cautious", values: cautiousValues(space, bars[lowest]) };
+}
+
+/**
+ * The design point of a limit state, for `check --at design_point:sliding`: of all values at which it fails, the likeliest.
+ *
+ * @throws StudyError where the limit state is not among those of the study, or no design point was found
+ */
+export function designPointOf(
+  study: Study,
+  name: LimitStateName,
+): { readonly name: string; readonly values: Readonly<Record<string, number>> } {
+  const model = buildModel(study);
+  const { states, space } = model;
+  const place = states.names.indexOf(name);
+  const refuse = (message: string): never => {
+    throw new StudyError([{ path: "assessment.limit_states", message }], study.file);
+  };
+  if (place < 0) return refuse(`${name} is not among the limit states of this study: ${states.names.join(", ")}`);
+  const search: DesignPointSearch = findDesignPoints(states, space, study.assessment.seed);
+  const { status, designPoint } = firstOrderResult(states, space, search.states[place]);
+  if (status === "none") return refuse(`no design point of ${name} was found: nothing within reach fails`);
+  return { name: `design point of ${name}${status === "usable" ? " (not converged)" : ""}`, values: designPoint };
 }
 
 export type { VariableSummary };

@@ -216,6 +216,18 @@ export interface FirstOrderResult {
   readonly evaluations: number;
 }
 
+/** Only where the design point is smooth. */
+export interface SecondOrderResult {
+  readonly reliabilityIndex: number | null;
+  /** Hohenbichler and Rackwitz (1988). */
+  readonly probability: number | null;
+  /** Breitung (1984). */
+  readonly breitung?: number;
+  /** Main curvatures of the limit surface at the design point, positive away from the origin. */
+  readonly curvatures?: readonly number[];
+  readonly evaluations?: number;
+}
+
 export interface Driver {
   readonly path: string;
   /** First-order share of the variance of the factor of safety; null for the system, which has no single factor. */
@@ -250,7 +262,7 @@ export interface LimitStateAssessment {
   readonly monteCarlo: MonteCarloResult;
   readonly firstOrderSecondMoment: SecondMomentResult;
   readonly firstOrderReliability?: FirstOrderResult;
-  readonly secondOrderReliability?: { readonly reliabilityIndex: number | null; readonly probability: number | null };
+  readonly secondOrderReliability?: SecondOrderResult;
   readonly drivers: readonly Driver[];
   readonly tornado: readonly TornadoBar[];
   readonly failurePicture: readonly FailurePicture[];
@@ -289,6 +301,24 @@ export interface BestEstimate {
   readonly evaluations: number;
   readonly years?: number;
   readonly meetsTarget?: boolean;
+  /** How the interval was made. */
+  readonly intervalKind?: string;
+  /** Why this method was taken. */
+  readonly reason?: string;
+  /** Reasons not to trust it; empty where there is none. */
+  readonly doubts?: readonly string[];
+  /** The same probability by an independent method; its evaluations are not among those above. */
+  readonly crossCheck?: {
+    readonly method: string;
+    readonly probability: number;
+    readonly standardError: number;
+    readonly interval: readonly [number, number];
+    readonly evaluations: number;
+    /** Whether the two lie within chance of each other (a false alarm once in a thousand). */
+    readonly agrees: boolean;
+    /** Factor between the two that the check could have seen; null where it saw no failure. */
+    readonly seesFactor: number | null;
+  };
 }
 
 export interface AssessResult extends ResultBase {

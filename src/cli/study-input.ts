@@ -1,4 +1,5 @@
 import { type Command, InvalidArgumentError, Option } from "commander";
+import type { SamplingMethod } from "../reliability/sampling-estimate.ts";
 import type { Study } from "../study/study.ts";
 import { readInput } from "./files.ts";
 import type { Io } from "./io.ts";
@@ -19,7 +20,7 @@ export interface SamplingOptions extends CommonOptions {
   readonly samples?: number;
   readonly precision?: number;
   readonly workers?: number;
-  readonly method?: string;
+  readonly method?: SamplingMethod;
 }
 
 export function addCommonOptions(command: Command): Command {

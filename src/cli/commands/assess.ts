@@ -1,6 +1,6 @@
 import type { Command } from "commander";
 import type { AssessResult } from "../../results.ts";
-import { type Io, UsageError } from "../io.ts";
+import type { Io } from "../io.ts";
 import { startProgress } from "../progress.ts";
 import {
   addSamplingOptions,
@@ -48,8 +48,6 @@ function assessJob(options: Options, io: Io): Job<AssessResult> {
 
 /** Assesses with progress on a terminal and a stop by Ctrl-C that keeps what was computed. */
 export async function runAssess({ study, text }: StudyInput, options: SamplingOptions, io: Io): Promise<AssessResult> {
-  if (options.method !== undefined && options.method !== "plain")
-    throw new UsageError(`--method ${options.method} is not available in this version`);
   if ((options.workers ?? 1) > 1 && options.quiet !== true)
     io.err("toehold: this version samples on one thread; --workers changes nothing\n");
   const { assess } = await import("../../assess.ts");
@@ -59,6 +57,7 @@ export async function runAssess({ study, text }: StudyInput, options: SamplingOp
       ...(options.seed === undefined ? {} : { seed: options.seed }),
       ...(options.samples === undefined ? {} : { samples: options.samples }),
       ...(options.precision === undefined ? {} : { precision: options.precision }),
+      ...(options.method === undefined ? {} : { method: options.method }),
       signal: io.signal,
       clock: io.clock,
       onProgress: (done, of) => progress.update(done, of),

@@ -57,15 +57,19 @@ async function pointOf(study: Study, at: string, text: string, io: Io): Promise<
     const { cautiousPoint } = await import("../../assess.ts");
     return withText(text, () => cautiousPoint(study), study.file);
   }
-  if (at.startsWith("design_point")) return designPoint(at);
+  if (at.startsWith("design_point")) {
+    const name = limitStateIn(at);
+    const { designPointOf } = await import("../../assess.ts");
+    return withText(text, () => designPointOf(study, name), study.file);
+  }
   const values = await readInput(at, io);
   const { readValues } = await import("../../study/read-values.ts");
   return { name: at, values: withText(values, () => readValues(values, study, at)) };
 }
 
-function designPoint(at: string): never {
+function limitStateIn(at: string): LimitStateName {
   const name = at.slice("design_point:".length);
   if (!limitStateNames.includes(name as LimitStateName))
     throw new UsageError(`--at ${at} names no limit state; write for example --at design_point:sliding`);
-  throw new UsageError(`--at ${at} is not available in this version`);
+  return name as LimitStateName;
 }
