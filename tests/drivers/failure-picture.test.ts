@@ -1,8 +1,13 @@
 import { expect, test } from "vitest";
-import { failurePicture } from "../../src/drivers/failure-picture.ts";
+import { failurePicture, weightedFailurePicture } from "../../src/drivers/failure-picture.ts";
+import { failureSample } from "../../src/drivers/failure-sample.ts";
+import { normalCdf, normalPdf } from "../../src/numeric/normal.ts";
 import { createBlockCounter } from "../../src/reliability/block-tally.ts";
+import { findDesignPoints } from "../../src/reliability/design-points.ts";
+import { failureCentres, mixtureOf, wholeMove } from "../../src/reliability/failure-mixture.ts";
 import { localRunner } from "../../src/reliability/local-runner.ts";
 import { monteCarlo } from "../../src/reliability/monte-carlo.ts";
+import { problemOf } from "../reliability/known-problems.ts";
 import { lowAndHigh, pictureOf } from "./low-and-high.ts";
 
 test("moves the mean of each unknown to where the straight line says it lies given failure", async () => {
@@ -33,4 +38,25 @@ test("is empty without failures", async () => {
   const run = await monteCarlo(plan, localRunner(createBlockCounter(states, space, plan)), { precision: 0 });
   expect(run.states[0].failures).toBe(0);
   expect(failurePicture(space, run.states[0])).toEqual([]);
+});
+
+test("weighted samples give the picture of a failure that counting never sees", () => {
+  // one in a million: −Φ⁻¹(1e-6) = 4.7534
+  const index = 4.753424308822899;
+  const rare = problemOf(
+    { "a.x": { kind: "normal", mean: 0, sd: 1 }, "b.y": { kind: "normal", mean: 3, sd: 2 } },
+    { sliding: ([x]) => Math.exp((index - x) / 5) },
+  );
+  const { points } = findDesignPoints(rare.states, rare.space, "rare").states[0];
+  const parts = mixtureOf(failureCentres(points), wholeMove);
+  const sample = failureSample(rare.states, parts, { seed: "rare", samples: 20_000 });
+  const [x, y] = weightedFailurePicture(rare.space, sample, 0);
+  const expected = normalPdf(index) / normalCdf(-index);
+  // sd given failure is about 0.2 for x and 2 for y: one seed in a million fails
+  expect(Math.abs(x.meanGivenFailure - expected)).toBeLessThan((4.9 * 0.21) / Math.sqrt(x.failures));
+  expect(Math.abs(y.meanGivenFailure - 3)).toBeLessThan((4.9 * 2) / Math.sqrt(y.failures));
+  expect(Math.abs(y.sdGivenFailure - 2)).toBeLessThan((4.9 * 2) / Math.sqrt(y.failures));
+  expect(x.failures).toBeGreaterThan(1000);
+  expect(x.givenFailure.reduce((sum, share) => sum + share, 0)).toBeCloseTo(1, 12);
+  expect(weightedFailurePicture(rare.space, { ...sample, failed: sample.failed.fill(0) }, 0)).toEqual([]);
 });
