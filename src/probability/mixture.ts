@@ -1,4 +1,4 @@
-import { findRisingRoot } from "../numeric/root.ts";
+import { findRisingRoot, type RisingFunction } from "../numeric/root.ts";
 import { completeMarginal } from "./complete-marginal.ts";
 import type { Marginal } from "./marginal.ts";
 
@@ -35,22 +35,23 @@ export function mixture(parts: readonly MixturePart[]): Marginal {
   const pdf = (x: number): number => over((of) => of.pdf(x));
   const cdf = (x: number): number => over((of) => of.cdf(x));
   const ccdf = (x: number): number => over((of) => of.ccdf(x));
-  const quantile = (p: number): number =>
-    pointBetween(
-      present.map(({ of }) => of.quantile(p)),
-      {
-        value: (x) => Math.log(cdf(x) / p),
-        slope: (x, value) => pdf(x) / (p * Math.exp(value)),
-      },
-    );
-  const upperQuantile = (q: number): number =>
-    pointBetween(
-      present.map(({ of }) => of.upperQuantile(q)),
-      {
-        value: (x) => -Math.log(ccdf(x) / q),
-        slope: (x, value) => pdf(x) / (q * Math.exp(-value)),
-      },
-    );
+  // F ≥ share·F_part: the quantile lies below each part's at p/share, and close to it where that part is alone
+  const quantile = (p: number): number => {
+    const [low, high] = range(present.map(({ of }) => of.quantile(p)));
+    const alone = present.filter(({ share }) => share > p).map(({ share, of }) => of.quantile(p / share));
+    return pointBetween(low, Math.min(high, ...alone), "high", {
+      value: (x) => Math.log(cdf(x) / p),
+      slope: (x, value) => pdf(x) / (p * Math.exp(value)),
+    });
+  };
+  const upperQuantile = (q: number): number => {
+    const [low, high] = range(present.map(({ of }) => of.upperQuantile(q)));
+    const alone = present.filter(({ share }) => share > q).map(({ share, of }) => of.upperQuantile(q / share));
+    return pointBetween(Math.max(low, ...alone), high, "low", {
+      value: (x) => -Math.log(ccdf(x) / q),
+      slope: (x, value) => pdf(x) / (q * Math.exp(-value)),
+    });
+  };
   const smooth = completeMarginal({
     kind: "mixture",
     mean,
@@ -66,11 +67,14 @@ export function mixture(parts: readonly MixturePart[]): Marginal {
   return { ...smooth, ...breaksOf(smooth, present) };
 }
 
+function range(values: readonly number[]): [number, number] {
+  return [Math.min(...values), Math.max(...values)];
+}
+
 /** The mixture's quantile lies between the least and the largest of its parts' at the same probability. */
-function pointBetween(quantiles: readonly number[], f: Parameters<typeof findRisingRoot>[0]): number {
-  const low = Math.min(...quantiles);
-  const high = Math.max(...quantiles);
-  return low === high ? low : findRisingRoot(f, low, high, 0.5 * (low + high)).x;
+function pointBetween(low: number, high: number, start: "low" | "high", f: RisingFunction): number {
+  if (low >= high) return start === "low" ? low : high;
+  return findRisingRoot(f, low, high, start === "low" ? low : high).x;
 }
 
 /** Kinks and jumps of the mixture, as points u. */

@@ -1,7 +1,9 @@
 import fc from "fast-check";
 import type { Distribution } from "../../src/study/study.ts";
 
-const between = (min: number, max: number): fc.Arbitrary<number> => fc.double({ min, max, noNaN: true });
+/** A thousand steps from one number to the other: plain values, as studies have them. */
+const between = (min: number, max: number): fc.Arbitrary<number> =>
+  fc.integer({ min: 0, max: 1000 }).map((step) => min + ((max - min) * step) / 1000);
 const mean = between(-50, 50);
 const positive = between(0.5, 60);
 const variation = between(0.02, 0.8);
@@ -29,9 +31,8 @@ const triangular = fc
     const peak = p.peak === 1 ? to : p.from + p.peak * p.width;
     return { kind: "triangular", from: p.from, peak, to };
   });
-const beta = fc
-  .record({ from: mean, width: between(0.1, 30), at: between(0.05, 0.95), spread: between(0.03, 0.85) })
-  .map(
+const betaWithSpread = (most: number): fc.Arbitrary<Distribution> =>
+  fc.record({ from: mean, width: between(0.1, 30), at: between(0.05, 0.95), spread: between(0.03, most) }).map(
     (p): Distribution => ({
       kind: "beta",
       from: p.from,
@@ -40,6 +41,7 @@ const beta = fc
       sd: p.spread * p.width * Math.sqrt(p.at * (1 - p.at)),
     }),
   );
+const beta = betaWithSpread(0.85);
 const gumbel = fc.record({ mean, sd: between(0.01, 20) }).map((p): Distribution => ({ kind: "gumbel", ...p }));
 const weibull = fc
   .record({ shape: between(0.6, 12), scale: positive, shift: between(-20, 20) })
@@ -58,7 +60,10 @@ const measured = fc
 const mixture = fc
   .record({
     share: between(0.05, 0.95),
-    parts: fc.tuple(fc.oneof(triangular, uniform, normal, beta), fc.oneof(triangular, gumbel, uniform, lognormal)),
+    parts: fc.tuple(
+      fc.oneof(triangular, uniform, normal, betaWithSpread(0.3)),
+      fc.oneof(triangular, gumbel, uniform, lognormal),
+    ),
   })
   .map(
     (p): Distribution => ({
