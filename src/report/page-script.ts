@@ -65,7 +65,10 @@ export const pageScript = `"use strict";
     return value === undefined ? cell.textContent : Number(value);
   };
   const sort = (table, column, head) => {
-    const down = head.getAttribute("aria-sort") !== "descending" && valueOf(table.tBodies[0].rows[0], column) !== "";
+    // Numbers show the largest first, words the first of the alphabet.
+    const numbers = [...table.tBodies[0].rows].some((row) => typeof valueOf(row, column) === "number");
+    const before = head.getAttribute("aria-sort");
+    const down = before === null ? numbers : before === "ascending";
     const sign = down ? -1 : 1;
     for (const other of all("th[aria-sort]", table)) other.removeAttribute("aria-sort");
     head.setAttribute("aria-sort", down ? "descending" : "ascending");

@@ -4,7 +4,7 @@ import { type Display, displayIn, limitStateName, limitStateWords } from "./disp
 import { significant, threeFigures } from "./number.ts";
 import { sheetBlocks } from "./sheet-blocks.ts";
 import { textTable, wrap } from "./table.ts";
-import { closing, heading, leastWidth, paragraphLines, type TerminalOptions, terminalSafe } from "./terminal.ts";
+import { closing, heading, leastWidth, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
 import { orList } from "./wording.ts";
 
 /** `toehold check` for reading: factors of safety, base, forces, the calculation, notes, cautions. */
@@ -12,7 +12,7 @@ export function terminalCheck(result: CheckResult, study: Study, options: Termin
   const display = displayIn(study.units);
   const run = study.units === "us" ? "foot" : "metre";
   const blocks = [
-    [heading(result.study, options), ...paragraphLines([valuesSentence(result)], options)],
+    [...title(result.study, options), ...paragraphLines([valuesSentence(result)], options)],
     [factorTable(result, display, options)],
     paragraphLines(verdicts(result), options),
     [heading(`Forces per ${run} run, about the tip of the toe`, options), forceTable(result, display, options)],

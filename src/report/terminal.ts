@@ -19,6 +19,10 @@ const faint = ["\u001b[2m", "\u001b[22m"] as const;
 export const heading = (text: string, { colour }: TerminalOptions): string =>
   colour ? `${bold[0]}${text}${bold[1]}` : text;
 
+/** The study's title, broken where it is long. */
+export const title = (text: string, options: TerminalOptions): readonly string[] =>
+  paragraphLines([text], options).map((line) => heading(line, options));
+
 /** What is read last. */
 export const quiet = (text: string, { colour }: TerminalOptions): string =>
   colour ? `${faint[0]}${text}${faint[1]}` : text;

@@ -21,8 +21,8 @@ export const labelRoom = (labels: readonly string[]): number =>
 /** Decades of a logarithmic axis of probabilities, from the one below the least to 1. */
 export function decades(least: number): { readonly floor: number; readonly values: readonly number[] } {
   const lowest = Math.min(Math.floor(Math.log10(Math.max(least, 1e-12)) - 0.15), -2);
-  const values = Array.from({ length: 1 - lowest }, (_, k) => 10 ** (lowest + k));
-  return { floor: 10 ** lowest, values };
+  const values = Array.from({ length: 1 - lowest }, (_, k) => Number(`1e${lowest + k}`));
+  return { floor: values[0], values };
 }
 
 /** Labels of such an axis: the number above, how often below. */
