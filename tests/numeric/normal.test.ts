@@ -33,7 +33,9 @@ test("the quantile meets the ends and the middle", () => {
 
 test("at infinity nothing or everything is left", () => {
   const infinity = Number.POSITIVE_INFINITY;
-  expect([normalPdf(infinity), normalUpper(infinity), normalCdf(infinity), normalUpper(-infinity)]).toEqual([0, 0, 1, 1]);
+  expect([normalPdf(infinity), normalUpper(infinity), normalCdf(infinity), normalUpper(-infinity)]).toEqual([
+    0, 0, 1, 1,
+  ]);
 });
 
 test("a number that is no probability is refused by its value", () => {

@@ -7,6 +7,7 @@ import {
   fitTable,
   locate,
   lookUp,
+  standInOf,
   tableNodes,
   tableReach,
   tabulate,
@@ -106,6 +107,18 @@ test("a function that hangs on one unknown shares the places and has broken cell
   locate(u, n, unbroken, location);
   lookUp(y.cubics, location, u, n, y.standIn, found);
   for (let i = 0; i < n; i++) expect(found[i]).toBeCloseTo(capped(marginal.quantileOfNormal(u[i])), 9);
+});
+
+test("the stand-in of a marginal is made once, and serves every wall that holds it to a range of its own", () => {
+  const marginal = marginalOf({ kind: "gamma", mean: 1.2, sd: 0.4 });
+  const x = standInOf(marginal);
+  expect(standInOf(marginal)).toBe(x);
+  const end = marginal.normalOfQuantile(2);
+  const held = tabulate((v) => 10 * Math.min(x(v), 2), { kinks: [end], jumps: [] });
+  evaluateTable(held, u, n, found);
+  for (let i = 0; i < n; i += 7) {
+    expect(found[i]).toBeCloseTo(10 * Math.min(marginal.quantileOfNormal(u[i]), 2), 7);
+  }
 });
 
 test("a kink that nobody named is found by the check of the cells", () => {
