@@ -1,9 +1,10 @@
 /**
  * The gamma function and the two building blocks that keep probabilities accurate far from the mean.
  *
- * The special functions here are the program's own because those of the library at hand (kept as a development
- * dependency and compared in tests/outside/special-functions) are off by up to 2 % in the incomplete gamma function for
- * shapes above 200, that is for a coefficient of variation below 7 %.
+ * The special functions here are the program's own: in the library that was tried (@stdlib/math-base-special-gammainc 0.3.1)
+ * the incomplete gamma function is off by up to 2 % for shapes of 400 and more, that is for a coefficient of variation of
+ * 5 % and less. They are held against 40-digit arithmetic and two other libraries in tests/outside/special-functions and
+ * tests/outside/reference-distributions.
  */
 
 const halfLogTwoPi = 0.9189385332046728; // ½ ln 2π
