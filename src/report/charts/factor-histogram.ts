@@ -56,6 +56,7 @@ export function factorHistogram(name: string, state: LimitStateAssessment): Char
             y: {
               field: "share",
               type: "quantitative",
+              scale: { domain: [0, 1.08 * Math.max(...bars.map((bar) => bar.share), 1e-9)], nice: false },
               axis: { title: "Samples, %", tickCount: 3, domain: false, ticks: false },
             },
             color: { condition: { test: "datum.failed", value: palette.fail }, value: palette.main },

@@ -2,17 +2,18 @@ import type { ReportInput } from "../../results.ts";
 import type { Study } from "../../study/study.ts";
 import { bullets, type PageSection, section } from "../markup.ts";
 import { grouped } from "../number.ts";
-import { orList } from "../wording.ts";
+import { orList, wallEstimate } from "../wording.ts";
 
 /** How far the number can be trusted: what is in it and what is not. */
 export function trustSection({ assess, study }: ReportInput): PageSection {
-  const { failures } = assess.system.monteCarlo;
+  const { counted } = wallEstimate(assess);
+  const from = counted === undefined ? "" : ` (from ${grouped(counted.failures)} failures seen)`;
   return section(
     "trust",
     "How far to trust this number",
     bullets([
       modelUncertainty(study),
-      `The interval tells how well the sampling found the probability of this model (from ${grouped(failures)} failing samples), not how well the model describes the site.`,
+      `The interval tells how well the sampling found the probability of this model${from}, not how well the model describes the site.`,
       "A small probability rests on the tails of the distributions, which no handful of tests has seen. Its order of magnitude means more than its digits.",
       "It is for one section. A long wall crosses many, and is likelier to fail somewhere along its length.",
       "Human error in design, building and use is not in it, and is behind many real failures.",
