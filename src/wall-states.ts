@@ -10,12 +10,13 @@ import type { JointSpace, Marginal } from "./probability/marginal.ts";
 import {
   brokenCells,
   createLocation,
-  fitTable,
   type Location,
   locate,
   lookUp,
-  tableNodes,
+  standInOf,
+  type Tabulated,
   tableReach,
+  tabulate,
 } from "./probability/marginal-table.ts";
 import type { LimitStates } from "./reliability/limit-states.ts";
 
@@ -32,21 +33,17 @@ interface Drive {
   readonly coefficients: readonly Coefficient[];
   /** Whether a sample can lie outside the physical range. */
   readonly strays: boolean;
-  /** x as the column has it (held to its range, scaled), of u. */
-  exactly(u: number): number;
   tables?: DriveTables;
 }
 
+/** Cells that do not serve are marked in the tables themselves. */
+const noBrokenCells = brokenCells([]);
+
 /** Tables over u of the column itself and of the coefficients that hang on it alone. Made on first use. */
 interface DriveTables {
-  readonly broken: Uint8Array;
   /** Absent for a normal marginal: a line needs no table. */
-  readonly column?: Float64Array;
-  readonly coefficients: readonly {
-    readonly values: Float64Array;
-    readonly into: Float64Array;
-    exactly(u: number): number;
-  }[];
+  readonly column?: Tabulated;
+  readonly coefficients: readonly { readonly table: Tabulated; readonly into: Float64Array }[];
   /** Coefficients with a kink within reach, or of a column that is the same for all: by their formula. */
   readonly byFormula: readonly { readonly value: (x: number) => number; readonly into: Float64Array }[];
 }
@@ -87,7 +84,6 @@ export function wallStates(
           (coefficient) => coefficient.from === input.slot && workspace.needs(coefficient.into),
         ),
         strays: marginal.lowest < input.lowest || marginal.highest > input.highest,
-        exactly: (u) => input.scale * Math.min(Math.max(marginal.quantileOfNormal(u), input.lowest), input.highest),
       };
     });
   const factors = kernel.limitStates.map((state) => columns[state.factor]);
@@ -177,33 +173,20 @@ function hold(drive: Drive, x: Float64Array, n: number, strayed: Uint8Array): vo
   }
 }
 
-const knownValues = new WeakMap<Marginal, Float64Array>();
-
-/** x at the nodes of the tables: reckoned once for a marginal, however many walls share it. */
-function nodeValues(marginal: Marginal): Float64Array {
-  const known = knownValues.get(marginal);
-  if (known !== undefined) return known;
-  const values = tableNodes().map((u) => marginal.quantileOfNormal(u));
-  knownValues.set(marginal, values);
-  return values;
-}
-
 function makeTables(drive: Drive, columns: Columns): DriveTables {
   const { marginal, input } = drive;
-  const x = nodeValues(marginal).map((value) => input.scale * Math.min(Math.max(value, input.lowest), input.highest));
+  const x = standInOf(marginal);
+  const held = (u: number): number => input.scale * Math.min(Math.max(x(u), input.lowest), input.highest);
   const ends = drive.strays ? [marginal.normalOfQuantile(input.lowest), marginal.normalOfQuantile(input.highest)] : [];
-  const broken = brokenCells([...marginal.kinks, ...marginal.jumps, ...ends]);
-  const reach = [drive.exactly(-tableReach), drive.exactly(tableReach)];
+  const breaks = { kinks: [...marginal.kinks, ...ends].filter(Number.isFinite), jumps: marginal.jumps };
+  const reach = [held(-tableReach), held(tableReach)];
   const smooth = (coefficient: Coefficient): boolean =>
     !coefficient.kinks.some((kink) => kink >= reach[0] && kink <= reach[1]);
   return {
-    broken,
-    ...(marginal.kind === "normal" ? {} : { column: fitTable(x) }),
-    coefficients: drive.coefficients.filter(smooth).map(({ value, into }) => ({
-      values: fitTable(x.map(value)),
-      into: columns[into],
-      exactly: (v) => value(drive.exactly(v)),
-    })),
+    ...(marginal.kind === "normal" ? {} : { column: tabulate(held, breaks) }),
+    coefficients: drive.coefficients
+      .filter(smooth)
+      .map(({ value, into }) => ({ table: tabulate((u) => value(held(u)), breaks), into: columns[into] })),
     byFormula: drive.coefficients
       .filter((coefficient) => !smooth(coefficient))
       .map(({ value, into }) => ({ value, into: columns[into] })),
@@ -220,15 +203,17 @@ function fillFromTables(
 ): void {
   const { column, marginal, input } = drive;
   const tabulated = tables.coefficients;
-  if (tables.column !== undefined || tabulated.length > 0) locate(u, n, tables.broken, location);
+  if (tables.column !== undefined || tabulated.length > 0) locate(u, n, noBrokenCells, location);
   if (drive.strays) markStrays(drive, u, n, strayed);
   if (tables.column === undefined) {
     const { mean, sd } = marginal;
     const { lowest, highest, scale } = input;
     for (let i = 0; i < n; i++) column[i] = scale * Math.min(Math.max(mean + sd * u[i], lowest), highest);
-  } else lookUp(tables.column, location, u, n, drive.exactly, column);
-  for (let k = 0; k < tabulated.length; k++)
-    lookUp(tabulated[k].values, location, u, n, tabulated[k].exactly, tabulated[k].into);
+  } else lookUp(tables.column.cubics, location, u, n, tables.column.standIn, column);
+  for (let k = 0; k < tabulated.length; k++) {
+    const { table, into } = tabulated[k];
+    lookUp(table.cubics, location, u, n, table.standIn, into);
+  }
   for (let k = 0; k < tables.byFormula.length; k++) {
     const { value, into } = tables.byFormula[k];
     for (let i = 0; i < n; i++) into[i] = value(column[i]);
