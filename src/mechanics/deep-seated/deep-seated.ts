@@ -12,7 +12,7 @@ export type { DeepSeatedResult } from "./result.ts";
  * Deep-seated failure: the smallest factor of safety over all admissible circles, by Bishop's simplified method in the limit of
  * thin slices.
  *
- * @param grid fineness of the search; the result does not depend on it
+ * @param grid fineness of the search; ten grids agree to 0.5 % (tests/mechanics/deep-seated/search.test.ts)
  */
 export function deepSeated(ground: DeepSeatedGround, grid: SearchGrid = defaultGrid): DeepSeatedResult {
   const probe = probeOf(ground);

@@ -33,6 +33,12 @@ export function distinctValleys(valleys: readonly Valley[]): readonly Valley[] {
   return kept;
 }
 
+/** A node of a mesh, as a valley to start from. */
+export interface Node extends Valley {
+  /** Its index. */
+  readonly at: number;
+}
+
 /** Factors on nodes of entry × exit × depth, row-major. */
 export interface Mesh {
   readonly counts: readonly [number, number, number];
@@ -112,9 +118,9 @@ export function layMesh(probe: Probe, grid: SearchGrid): Mesh {
 }
 
 /** Nodes that no neighbour lies below, best first; on a plane, no neighbour in that plane. */
-export function valleysOf(mesh: Mesh, axis = -1, index = 0): readonly Valley[] {
+export function valleysOf(mesh: Mesh, axis = -1, index = 0): readonly Node[] {
   const { counts, factors, places } = mesh;
-  const found: Valley[] = [];
+  const found: Node[] = [];
   const from = (along: number): number => (along === axis ? index : 0);
   const to = (along: number): number => (along === axis ? index + 1 : counts[along]);
   for (let i = from(0); i < to(0); i++)
@@ -122,7 +128,7 @@ export function valleysOf(mesh: Mesh, axis = -1, index = 0): readonly Valley[] {
       for (let d = from(2); d < to(2); d++) {
         const at = (i * counts[1] + k) * counts[2] + d;
         if (factors[at] < leftOut && isValley(mesh, i, k, d, axis))
-          found.push({ place: places.slice(3 * at, 3 * at + 3), factor: factors[at] });
+          found.push({ at, place: places.slice(3 * at, 3 * at + 3), factor: factors[at] });
       }
   return found.sort((a, b) => a.factor - b.factor);
 }
@@ -141,7 +147,7 @@ function isValley({ counts, factors }: Mesh, i: number, k: number, d: number, ax
 }
 
 /** The lowest nodes that lie at least three apart from one another in some direction: starts that the mesh is too coarse to show as valleys. */
-export function lowNodes({ counts, factors, places }: Mesh, most: number): readonly Valley[] {
+export function lowNodes({ counts, factors, places }: Mesh, most: number): readonly Node[] {
   const order = Array.from(factors.keys())
     .filter((at) => factors[at] < leftOut)
     .sort((one, other) => factors[one] - factors[other]);
@@ -149,7 +155,8 @@ export function lowNodes({ counts, factors, places }: Mesh, most: number): reado
   for (const at of order) {
     if (kept.length === most) break;
     const [d, k, i] = [at % counts[2], Math.floor(at / counts[2]) % counts[1], Math.floor(at / counts[2] / counts[1])];
-    if (kept.every(([, a, b, c]) => Math.abs(a - i) > 2 || Math.abs(b - k) > 2 || Math.abs(c - d) > 2)) kept.push([at, i, k, d]);
+    if (kept.every(([, a, b, c]) => Math.abs(a - i) > 2 || Math.abs(b - k) > 2 || Math.abs(c - d) > 2))
+      kept.push([at, i, k, d]);
   }
-  return kept.map(([at]) => ({ place: places.slice(3 * at, 3 * at + 3), factor: factors[at] }));
+  return kept.map(([at]) => ({ at, place: places.slice(3 * at, 3 * at + 3), factor: factors[at] }));
 }

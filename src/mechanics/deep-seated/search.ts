@@ -1,5 +1,5 @@
 import { circleAt } from "./circle.ts";
-import { distinctValleys, layMesh, type SearchGrid, lowNodes, type Valley, valleysOf } from "./mesh.ts";
+import { distinctValleys, layMesh, lowNodes, type SearchGrid, type Valley, valleysOf } from "./mesh.ts";
 import { descend } from "./nelder-mead.ts";
 import { factorAt, type Probe } from "./probe.ts";
 
@@ -16,25 +16,31 @@ export function searchCircles(probe: Probe, grid: SearchGrid): readonly Valley[]
   const inSpace = valleysOf(mesh);
   if (inSpace.length === 0) return [];
   const steps = [1.5 / grid.entries, 1.5 / grid.exits, 0.5 / grid.depths];
+  const finer = steps.map((step) => 0.3 * step);
   const worthwhile = (start: Valley): boolean => start.factor <= 1.3 * inSpace[0].factor;
-  const found = [...inSpace.slice(0, grid.starts), ...lowNodes(mesh, grid.starts)]
+  const low = lowNodes(mesh, grid.starts).filter(({ at }) => !inSpace.some((valley) => valley.at === at));
+  const found = [...inSpace.slice(0, grid.starts), ...low]
     .filter(worthwhile)
-    .map((start) => followDown(probe, start, steps));
+    .map((start) => roughlyDown(probe, start, steps));
   for (const { axis, index } of mesh.planes) {
     const onPlane = steps.map((step, i) => (i === axis ? 0 : step));
     const starts = valleysOf(mesh, axis, index).filter(worthwhile).slice(0, 2);
-    found.push(...starts.map((start) => followDown(probe, start, onPlane)));
+    found.push(...starts.map((start) => roughlyDown(probe, start, onPlane)));
   }
-  const finer = steps.map((step) => 0.3 * step);
-  const beside = distinctValleys(found)
-    .slice(0, 3)
-    .flatMap((valley) => besideLevels(probe, valley))
-    .map((start) => followDown(probe, start, [finer[0], finer[1], 0]));
-  const valleys = distinctValleys([...found, ...beside]);
-  return distinctValleys([
-    ...valleys.slice(0, 2).map((valley) => followDown(probe, valley, finer)),
-    ...valleys.slice(2),
-  ]);
+  const deepest = distinctValleys(found).slice(0, 5);
+  const beside = deepest.flatMap((valley) => besideLevels(probe, valley));
+  const ends = [
+    ...deepest.map((valley) => followDown(probe, valley, finer)),
+    ...beside.map((start) => followDown(probe, start, [finer[0], finer[1], 0])),
+  ];
+  const valleys = distinctValleys([...ends, ...found]);
+  return distinctValleys([followDown(probe, valleys[0], finer), ...valleys.slice(1)]);
+}
+
+/** One short descent: enough to tell which valleys are worth more. */
+function roughlyDown(probe: Probe, start: Valley, steps: readonly number[]): Valley {
+  const end = descend((place) => factorAt(probe, place), start.place, steps, 1e-4, 80);
+  return { place: withinLimits(probe, end.x), factor: end.value };
 }
 
 /** The circles of a valley's entry and exit that are tangent to the levels above and below it: the factor has a cusp there. */

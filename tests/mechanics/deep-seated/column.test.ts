@@ -33,7 +33,8 @@ test("a key is wall instead of ground", () => {
 test("the water line runs straight under the base; a dry side counts as the underside there, and stays dry itself", () => {
   const both = ordinaryGround({ water: { behind: 2, front: -1 } });
   const line = (ground: typeof both, x: number) => waterLineAt(ground, waterLevels(ground), x);
-  expect([-1, 0, 1.85, 3.7, 9].map((x) => line(both, x))).toEqual([-1, -1, 0.5, 2, 2]);
+  expect([-1, 0, 4, 9].map((x) => line(both, x))).toEqual([-1, -1, 2, 2]);
+  expect(line(both, 1.85)).toBeCloseTo(0.5, 12);
   const frontAlone = ordinaryGround({ water: { front: -1 } });
   expect(line(frontAlone, 1.85)).toBeCloseTo(-0.5, 12);
   expect(line(frontAlone, 5)).toBe(Number.NEGATIVE_INFINITY);

@@ -32,14 +32,14 @@ test.each([
 ])("more %s never lowers the factor of a circle", (_, stronger) => {
   const roll = dice(31);
   let compared = 0;
-  for (let i = 0; i < 150; i++) {
+  for (let i = 0; i < 80; i++) {
     const ground = randomGround(roll);
     for (const [plain, strong] of pairs(ground, withSoils(ground, stronger), roll)) {
       expect(strong).toBeGreaterThanOrEqual(plain * (1 - rounding));
       compared++;
     }
   }
-  expect(compared).toBeGreaterThan(200);
+  expect(compared).toBeGreaterThan(100);
 });
 
 test("strength times k is the factor times k where there is no friction", () => {
@@ -105,7 +105,7 @@ test("more load behind lowers the factor, more water behind too, more soil in fr
 
 test("small changes of any input make small changes of the factor", () => {
   const roll = dice(41);
-  for (let i = 0; i < 12; i++) {
+  for (let i = 0; i < 5; i++) {
     const ground = { ...randomGround(roll) };
     const quiet = { ...ground, loads: { ...ground.loads, lines: [] } };
     const shifted = withSoils(quiet, (soil) => ({

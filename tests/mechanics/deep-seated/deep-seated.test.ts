@@ -86,16 +86,13 @@ test("a load counts from the crest on to where the circle enters, at the entry t
   expect(loaded.factor).toBeLessThan(deepSeated(ordinaryGround()).factor);
 });
 
-test("60 random walls give a number between 0 and the cap, in well under a second each", () => {
+test("25 random walls give a number between 0 and the cap, with some thousand circles each", () => {
   const roll = dice(77);
-  let longest = 0;
-  for (let i = 0; i < 60; i++) {
-    const ground = randomGround(roll);
-    const start = performance.now();
-    const { factor, resisting, driving } = deepSeated(ground);
-    longest = Math.max(longest, performance.now() - start);
+  for (let i = 0; i < 25; i++) {
+    const { factor, resisting, driving, evaluations } = deepSeated(randomGround(roll));
     if (!(factor >= 0 && factor <= factorCap)) throw new RangeError(`wall ${i}: ${factor}`);
     if (!Number.isFinite(resisting) || !Number.isFinite(driving)) throw new RangeError(`wall ${i}: ${resisting}`);
+    // about 10 µs each: what keeps a search under 0.1 s
+    expect(evaluations).toBeLessThan(10_000);
   }
-  expect(longest).toBeLessThan(1000);
 });

@@ -39,14 +39,14 @@ test.each(Object.entries(grounds))("ten search grids find the same factor to 0.5
   expect(Math.max(...factors) / Math.min(...factors)).toBeLessThan(1.005);
 });
 
-test("no circle among 2000 drawn at random lies more than 0.5 % below what the search found, on 15 random walls", () => {
+test("no circle among 1000 drawn at random lies more than 0.5 % below what the search found, on 8 random walls", () => {
   const roll = dice(9);
-  for (let i = 0; i < 15; i++) {
+  for (let i = 0; i < 8; i++) {
     const ground = randomGround(roll);
     const found = deepSeated(ground).factor;
     const probe = probeOf(ground);
     let least = Number.POSITIVE_INFINITY;
-    for (let k = 0; k < 2000; k++)
+    for (let k = 0; k < 1000; k++)
       least = Math.min(
         least,
         factorAt(probe, [4 * roll() ** 1.5, 3 * roll() ** 1.5, probe.limits.levels.length * roll()]),
