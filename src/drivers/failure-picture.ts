@@ -5,6 +5,7 @@ import type { StateTotals } from "../reliability/monte-carlo.ts";
 import { dot, type FailureEvent } from "../reliability/point-evaluator.ts";
 import type { FailurePicture } from "../results.ts";
 import { belongs, type FailureSample } from "./failure-sample.ts";
+import { lazyTable } from "./lazy-table.ts";
 
 /** Shares of the prior in the bins of u: known exactly, the outermost bins open. */
 const priorShares: readonly number[] = pictureEdges.slice(1).map((edge, bin) => {
@@ -49,11 +50,12 @@ export function weightedFailurePicture(
   return space.unknowns.map(({ path, marginal }, v) => {
     const bins = new Array<number>(pictureEdges.length - 1).fill(0);
     let [shift, square] = [0, 0];
+    const valueAt = lazyTable(marginal, marginal.quantileOfNormal);
     for (const s of chosen) {
       for (let j = 0; j < z.length; j++) z[j] = sample.z[j][s];
       const u = dot(space.rows[v], z);
       const share = sample.weights[s] / total;
-      const off = marginal.quantileOfNormal(u) - marginal.mean;
+      const off = valueAt(u) - marginal.mean;
       shift += share * off;
       square += share * off * off;
       bins[Math.min(Math.max(Math.floor((u - pictureEdges[0]) * 4), 0), bins.length - 1)] += share;

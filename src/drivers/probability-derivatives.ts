@@ -6,6 +6,7 @@ import type { RemadeAt } from "../reliability/first-order.ts";
 import { dot, type FailureEvent } from "../reliability/point-evaluator.ts";
 import type { FirstOrderResult } from "../results.ts";
 import { belongs, type FailureSample } from "./failure-sample.ts";
+import { lazyTable } from "./lazy-table.ts";
 
 export interface ProbabilityDerivative {
   /** Change of the failure probability per unit of the parameter; null where it is not known. */
@@ -43,6 +44,13 @@ export function probabilityDerivatives(
 ): readonly ProbabilityDerivatives[] {
   const { unknowns, rows } = space;
   const movements = unknowns.map(({ marginal }, i) => movementsOf(marginal, remadeAt(i)));
+  const scores = unknowns.map(({ marginal }, i) => {
+    const of = (movement: Movement): Score => ({
+      own: lazyTable(marginal, (u) => movement.ofLogDensity(marginal.quantileOfNormal(u))),
+      beside: lazyTable(marginal, movement.ofNormal),
+    });
+    return { mean: of(movements[i].mean), sd: of(movements[i].sd) };
+  });
   const beside = besideOthers(space);
   const count = sample.weights.length;
   const sums = unknowns.map(() => ({ mean: 0, mean2: 0, sd: 0, sd2: 0 }));
@@ -52,19 +60,15 @@ export function probabilityDerivatives(
     for (let j = 0; j < z.length; j++) z[j] = sample.z[j][s];
     const u = Float64Array.from(rows, (row) => dot(row, z));
     const shift = beside(u);
-    unknowns.forEach(({ marginal }, i) => {
-      if (movements[i].edged) return;
-      const x = marginal.quantileOfNormal(u[i]);
-      const score = (movement: Movement): number => {
-        const value = movement.ofLogDensity(x) + (shift[i] === 0 ? 0 : shift[i] * movement.ofNormal(u[i]));
-        return Number.isFinite(value) ? sample.weights[s] * value : 0;
-      };
-      const [mean, sd] = [score(movements[i].mean), score(movements[i].sd)];
+    for (let i = 0; i < unknowns.length; i++) {
+      if (movements[i].edged) continue;
+      const mean = sample.weights[s] * scoreAt(scores[i].mean, u[i], shift[i]);
+      const sd = sample.weights[s] * scoreAt(scores[i].sd, u[i], shift[i]);
       sums[i].mean += mean;
       sums[i].mean2 += mean * mean;
       sums[i].sd += sd;
       sums[i].sd2 += sd * sd;
-    });
+    }
   }
   return unknowns.map(({ path }, i) => {
     if (movements[i].edged) return { path, ...fromDesignPoint(path, firstOrder) };
@@ -75,6 +79,17 @@ export function probabilityDerivatives(
       perSd: fromScores(sd, sd2, sample.drawn),
     };
   });
+}
+
+/** The two terms of a score, as functions of the unknown's own normal. */
+interface Score {
+  own(u: number): number;
+  beside(u: number): number;
+}
+
+function scoreAt(score: Score, u: number, shift: number): number {
+  const value = score.own(u) + (shift === 0 ? 0 : shift * score.beside(u));
+  return Number.isFinite(value) ? value : 0;
 }
 
 function fromScores(sum: number, squares: number, n: number): ProbabilityDerivative {
