@@ -30,7 +30,7 @@ function secondOrderOf(model: Model, search: DesignPointSearch, state: number): 
   const before = evaluationsOf(states);
   const [nearest] = refined(states, search.states[state].points);
   if (nearest?.status !== "smooth") return undefined;
-  const curvatures = curvaturesAt(states, nearest);
+  const curvatures = states.dimension < 2 ? { values: [], smooth: true } : curvaturesAt(states, nearest);
   if (!curvatures.smooth) return undefined;
   const result = secondOrder(nearest.reliabilityIndex, curvatures.values);
   if (result === undefined) return undefined;

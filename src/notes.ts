@@ -4,6 +4,8 @@ import type { Notice, Study } from "./study/study.ts";
 
 export function assessmentNotes(study: Study, result: AssessResult): readonly Notice[] {
   return [
+    ...methodsDisagree(result),
+    ...doubtfulEstimate(result),
     ...modelUncertainty(study),
     ...unstableSamples(result),
     ...strays(result),
@@ -12,6 +14,22 @@ export function assessmentNotes(study: Study, result: AssessResult): readonly No
     ...groundAsItIs(study),
     ...overturningLast(result),
   ];
+}
+
+/** Two independent methods that part by more than chance: the first thing to know. */
+function methodsDisagree({ bestEstimate: { method, probability, crossCheck } }: AssessResult): readonly Notice[] {
+  if (crossCheck === undefined || crossCheck.agrees) return [];
+  return [
+    {
+      path: "",
+      message: `two methods disagree by more than chance: ${method} sampling gives ${probability.toPrecision(3)}, ${crossCheck.method} sampling ${crossCheck.probability.toPrecision(3)}; rely on neither until it is known why (more samples, another seed, --method)`,
+    },
+  ];
+}
+
+function doubtfulEstimate({ bestEstimate: { method, doubts = [] } }: AssessResult): readonly Notice[] {
+  if (doubts.length === 0) return [];
+  return [{ path: "", message: `the best estimate, by ${method} sampling, is in doubt: ${doubts.join("; ")}` }];
 }
 
 /** Published figures that may serve where nothing better is known; JCSS Probabilistic Model Code, 3.7 (2006). */
@@ -55,10 +73,14 @@ function strays(result: AssessResult): readonly Notice[] {
 function noFailures(result: AssessResult): readonly Notice[] {
   const { failures, samples, interval } = result.system.monteCarlo;
   if (failures > 0) return [];
+  const elsewhere =
+    result.bestEstimate.method === "plain" || !(result.bestEstimate.probability > 0)
+      ? ""
+      : `; the best estimate rests on ${result.bestEstimate.method} sampling`;
   return [
     {
       path: "assessment.samples",
-      message: `no failure in ${samples} samples: this says only that the probability is below ${interval[1].toPrecision(2)} with 97.5 % confidence, not that the wall cannot fail`,
+      message: `no failure in ${samples} plain samples: this says only that the probability is below ${interval[1].toPrecision(2)} with 97.5 % confidence, not that the wall cannot fail${elsewhere}`,
     },
   ];
 }

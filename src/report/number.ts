@@ -54,6 +54,7 @@ function percentText(probability: number): string {
 /** "between 1 in 225 and 1 in 255", the likelier end first; in per cent, the smaller first, where one end is likely. */
 export function betweenText([low, high]: readonly [number, number]): string {
   if (high >= likely) return `between ${low <= 0 ? `0${thin}%` : percentText(low)} and ${percentText(high)}`;
+  if (high > 0 && high < leastProbability) return oneIn(high);
   if (low < leastProbability) return `at most ${oneIn(high)}`;
   return `between ${oneIn(high)} and ${oneIn(low)}`;
 }

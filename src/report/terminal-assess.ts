@@ -1,5 +1,6 @@
 import type { AssessResult, Driver, LimitStateAssessment, VariableSummary } from "../results.ts";
 import type { Study } from "../study/study.ts";
+import { bestEstimateSentences } from "./best-estimate-text.ts";
 import { type Display, displayIn, limitStateName, limitStateWords } from "./display.ts";
 import {
   grouped,
@@ -13,7 +14,7 @@ import {
 } from "./number.ts";
 import { sparkline } from "./sparkline.ts";
 import { textTable, wrap } from "./table.ts";
-import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe } from "./terminal.ts";
+import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
 import {
   againstTarget,
   countedEstimate,
@@ -30,7 +31,7 @@ import {
 export function terminalAssess(result: AssessResult, study: Study, options: TerminalOptions): string {
   const display = displayIn(study.units);
   const blocks = [
-    [heading(result.study, options), ...answer(result, options)],
+    [...title(result.study, options), ...answer(result, options)],
     [probabilityTable(result, options)],
     [heading("What drives it", options), ...driversText(result, options)],
     ...(options.all
@@ -250,5 +251,6 @@ function howComputed(result: AssessResult, options: TerminalOptions): readonly s
       options.width,
       "  ",
     ),
+    ...paragraphLines(bestEstimateSentences(result), options),
   ];
 }

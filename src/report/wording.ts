@@ -38,7 +38,14 @@ export function estimateSentence(estimate: Estimate): string {
     return `no failure in ${countText(counted)}, which shows only that it is rarer than ${oneIn(interval[1])} (upper end of the 95 % interval)`;
   if (counted !== undefined && counted.failures === counted.samples)
     return `failure in every one of ${countText(counted)}`;
-  return `about ${oneIn(probability)}; ${betweenText(interval)}`;
+  const between = betweenText(interval);
+  return aboutText(probability) === between ? between : `${aboutText(probability)}; ${between}`;
+}
+
+/** "about 1 in 240"; "below 1 in 10¹²" for what is too rare to name. */
+export function aboutText(probability: number): string {
+  const text = oneIn(probability);
+  return text.startsWith("below") ? text : `about ${text}`;
 }
 
 /** "131 072 samples". */

@@ -86,7 +86,6 @@ test.each([
   [["assess", yard, "--watch", "--json"], "cannot stand with --json"],
   [["check", yard, "--watch", "--compare", yard], "cannot stand with --compare"],
   [["check", yard, "--watch", "-o", "x.txt"], "cannot stand with -o"],
-  [["assess", yard, "--watch", "--method", "sobol"], "not available in this version"],
 ])("%j is wrong usage and does not wait", async (args, words) => {
   running = run(args, io);
   expect(await running).toBe(2);

@@ -7,6 +7,7 @@ import { escapeHtml } from "../escape.ts";
 import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
 import { betweenText, grouped, indexText, intervalText, oneIn, probabilityText, significant } from "../number.ts";
 import {
+  aboutText,
   againstTarget,
   allFailed,
   countedEstimate,
@@ -82,8 +83,9 @@ function answerParts(estimate: Estimate, how: string): readonly [big: string, re
       "Every sample failed",
       `The wall fails by ${how} in all of ${words}, so its probability of failure is ${betweenText(interval)} (95 % interval).`,
     ];
+  const about = aboutText(probability);
   return [
-    `About ${oneIn(probability)}`,
+    `${about[0].toUpperCase()}${about.slice(1)}`,
     `is the probability that the wall fails by ${how}: ${betweenText(interval)} (95 % interval); as a number, ${probabilityText(probability)}.`,
   ];
 }

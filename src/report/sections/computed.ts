@@ -1,4 +1,5 @@
 import type { AssessResult, ReportInput } from "../../results.ts";
+import { bestEstimateSentences, methodName } from "../best-estimate-text.ts";
 import { chartFigure } from "../chart-figure.ts";
 import { convergenceChart } from "../charts/convergence.ts";
 import { factorHistogram } from "../charts/factor-histogram.ts";
@@ -18,8 +19,9 @@ export async function computedSection({ assess }: ReportInput): Promise<PageSect
     "computed",
     "How it was computed",
     paragraph(
-      `The stability calculation ran ${grouped(assess.run.sampling.evaluations)} times with values drawn from the distributions below (${methodWords(assess)}, seed “${assess.seed}”). A probability is the share of runs with a factor of safety below 1; its interval is the 95 % Clopper–Pearson interval.`,
+      `The stability calculation ran ${grouped(assess.run.sampling.evaluations)} times with values drawn from the distributions below (${methodName("plain")}, seed “${assess.seed}”). A probability is the share of runs with a factor of safety below 1; its interval is the 95 % Clopper–Pearson interval.`,
     ),
+    ...bestEstimateSentences(assess).map((sentence) => paragraph(sentence)),
     `<div class="trio">${histograms.join("")}</div>`,
     methodsTable(assess),
     convergence.length > 1
@@ -32,9 +34,6 @@ export async function computedSection({ assess }: ReportInput): Promise<PageSect
     ),
   );
 }
-
-const methodWords = ({ bestEstimate }: AssessResult): string =>
-  bestEstimate.method.startsWith("plain") ? "plain Monte Carlo sampling" : bestEstimate.method.replaceAll("_", " ");
 
 /** Each method that ran, row by row, so that a reader sees where they agree. */
 function methodsTable({ limitStates }: AssessResult): string {

@@ -85,18 +85,24 @@ describe("toehold assess", () => {
     expect(valueIn(JSON.parse(await readFile(file, "utf8")), "kind")).toBe("assess");
   });
 
-  test("a sampling method that is not there yet is refused, not replaced", async () => {
-    const ran = await runWith(["assess", yard, "--method", "subset"]);
-    expect(ran).toMatchObject({ code: 2, out: "" });
-    expect(ran.err).toContain("--method subset is not available in this version");
-  });
+  test.each(["plain", "latin_hypercube", "sobol", "importance", "subset", "directional"])(
+    "--method %s makes the best estimate with that method, and checks it by another",
+    async (method) => {
+      const best = valueIn(await jsonOf(["assess", yard, "--json", ...few, "--method", method]), "best_estimate");
+      expect(valueIn(best, "method")).toBe(method);
+      const [low, high] = valueIn(best, "interval") as [number, number];
+      expect(low).toBeGreaterThan(0);
+      expect(high).toBeLessThan(1);
+      expect(valueIn(best, "cross_check", "agrees")).toBe(true);
+    },
+  );
 
-  test("workers that are not there yet are told on standard error, and change no bit", async () => {
-    const ran = await runWith(["assess", yard, ...few, "--workers", "4"]);
-    expect(ran).toMatchObject({
-      code: 0,
-      err: "toehold: this version samples on one thread; --workers changes nothing\n",
-    });
-    expect(await runWith(["assess", yard, ...few, "--workers", "4", "--quiet"])).toMatchObject({ err: "" });
+  test("first-order reliability stands beside sampling, with its design point", async () => {
+    const sliding = valueIn(await jsonOf(["assess", yard, "--json", ...few]), "limit_states", "sliding");
+    const first = valueIn(sliding, "first_order_reliability");
+    const importance = Object.values(valueIn(first, "importance") as Record<string, number>);
+    expect(valueIn(first, "converged")).toBe(true);
+    expect(importance.reduce((sum, share) => sum + share, 0)).toBeCloseTo(1, 9);
+    expect(Object.keys(valueIn(first, "design_point") as object)).toContain("water.behind.level");
   });
 });

@@ -46,6 +46,16 @@ describe("toehold check", () => {
     expect(await factorOf("--at", "cautious")).toBeLessThan((await factorOf()) as number);
   });
 
+  test("--at design_point:sliding stands where sliding begins", async () => {
+    expect(await factorOf("--at", "design_point:sliding")).toBeCloseTo(1, 4);
+  });
+
+  test("--at the design point of a limit state that the study leaves out is refused", async () => {
+    const ran = await runWith(["check", yard, "--at", "design_point:eccentricity"]);
+    expect(ran).toMatchObject({ code: 1, out: "" });
+    expect(ran.err).toContain("eccentricity is not among the limit states of this study");
+  });
+
   test("--at FILE takes values by path, and answers a wrong path with its line", async () => {
     const file = join(folder, "values.yaml");
     await writeFile(file, "water.behind.level: 3.2\n");
