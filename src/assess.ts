@@ -49,6 +49,7 @@ export interface AssessOptions {
   readonly signal?: AbortSignal;
   /** Counts blocks elsewhere, on workers; in this thread where absent. */
   readonly startRunner?: (study: Study, plan: SamplingPlan) => BlockRunner;
+  /** Threads that `startRunner` counts on: shown beside the result. */
   readonly workers?: number;
   /** A clock in seconds, for the time shown beside the result; no time is shown without one. */
   readonly clock?: () => number;
@@ -76,7 +77,7 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     precision: options.precision ?? study.assessment.precision,
     ...(options.onProgress === undefined ? {} : { onProgress: options.onProgress }),
     ...(options.signal === undefined ? {} : { signal: options.signal }),
-  });
+  }).finally(() => runner.close?.());
   const period = await periodOf(model, seed, options, run.complete);
   const goOn = run.complete && (period?.complete ?? true) && options.signal?.aborted !== true;
   const search = goOn ? findDesignPoints(states, space, seed) : undefined;

@@ -10,6 +10,8 @@ export interface BlockRunner {
   /** Blocks that may be in hand at once. */
   readonly ahead: number;
   tally(block: number): Promise<BlockTally>;
+  /** Lets go of what was started for the run; blocks still in hand are never answered. */
+  close?(): Promise<void>;
 }
 
 export interface MonteCarloOptions {

@@ -48,9 +48,10 @@ function assessJob(options: Options, io: Io): Job<AssessResult> {
 
 /** Assesses with progress on a terminal and a stop by Ctrl-C that keeps what was computed. */
 export async function runAssess({ study, text }: StudyInput, options: SamplingOptions, io: Io): Promise<AssessResult> {
-  if ((options.workers ?? 1) > 1 && options.quiet !== true)
-    io.err("toehold: this version samples on one thread; --workers changes nothing\n");
   const { assess } = await import("../../assess.ts");
+  const { workersFor } = await import("../../parallel/worker-count.ts");
+  const workers = options.workers ?? workersFor(study, options.samples ?? study.assessment.samples);
+  const runner = workers > 1 ? await import("../../parallel/worker-runner.ts") : undefined;
   const progress = await startProgress(io, options.quiet === true);
   try {
     return await assess(study, {
@@ -58,6 +59,8 @@ export async function runAssess({ study, text }: StudyInput, options: SamplingOp
       ...(options.samples === undefined ? {} : { samples: options.samples }),
       ...(options.precision === undefined ? {} : { precision: options.precision }),
       ...(options.method === undefined ? {} : { method: options.method }),
+      ...(runner === undefined ? {} : { startRunner: (of, plan) => runner.workerRunner(of, plan, workers) }),
+      workers,
       signal: io.signal,
       clock: io.clock,
       onProgress: (done, of) => progress.update(done, of),
