@@ -5,7 +5,7 @@
 export function textWidth(words: string, size = 12): number {
   let ems = 0;
   for (const sign of words) ems += emsOf(sign);
-  return ems * size;
+  return 1.06 * ems * size;
 }
 
 function emsOf(sign: string): number {

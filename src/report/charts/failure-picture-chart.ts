@@ -72,7 +72,7 @@ function panel({ picture, variable, shift }: Shifted, display: Display): object 
     width: 254,
     height: 92,
     title: {
-      text: `${shortened(variable.label, 36)}${unit === "–" ? "" : `, ${unit}`}`,
+      text: `${shortened(variable.label, 32)}${unit === "–" ? "" : `, ${unit}`}`,
       subtitle: `shifts by ${shiftText(shift)} standard deviations`,
       subtitleColor: palette.muted,
       subtitleFontSize: 11.5,

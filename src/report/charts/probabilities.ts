@@ -4,6 +4,7 @@ import { oneIn, probabilityText } from "../number.ts";
 import { markWords } from "../page-svg.ts";
 import { palette } from "../palette.ts";
 import type { Chart } from "../render-chart.ts";
+import { textWidth } from "../text-width.ts";
 import {
   allFailed,
   countedEstimate,
@@ -14,7 +15,7 @@ import {
   wallEstimate,
   yearsText,
 } from "../wording.ts";
-import { decadeLabels, decades } from "./common.ts";
+import { chartWidth, decadeLabels, decades } from "./common.ts";
 
 /** Probability of each limit state and of the wall, with its interval, on a logarithmic axis, against the target. */
 export function probabilityChart(result: AssessResult): Chart {
@@ -59,7 +60,7 @@ export function probabilityChart(result: AssessResult): Chart {
           axis: {
             title: "Probability of failure",
             values,
-            labelExpr: decadeLabels,
+            labelExpr: values.length > 9 ? `${decadeLabels}[0]` : decadeLabels,
             labelLineHeight: 15,
             labelFlush: false,
           },
@@ -70,19 +71,27 @@ export function probabilityChart(result: AssessResult): Chart {
   };
 }
 
+/** Pixels between the names and the end of the axis, near enough. */
+const axisRoom = chartWidth - 150;
+
 function rowOf(name: string, state: string, estimate: Estimate, floor: number): Record<string, unknown> {
   const none = noneSeen(estimate);
   const [low, high] = estimate.interval;
-  const far = high > 0.03;
+  const words = none ? `none seen: rarer than ${oneIn(high)}` : oneInCell(estimate);
+  // Words stand right of their bar; left of it, or over its end, where the axis ends too soon.
+  const pixels = (p: number): number => axisRoom * (1 - Math.log10(Math.max(p, floor)) / Math.log10(floor));
+  const room = textWidth(words, 13) * 1.08 + 14;
+  const far = pixels(high) + room > axisRoom + 20;
+  const overEnd = pixels(low) < room;
   return {
     name,
     probability: none ? null : Math.max(estimate.probability, floor),
     low: Math.max(low, floor),
     high: Math.max(high, floor),
-    end: far ? Math.max(low, floor) : Math.max(high, floor),
+    end: Math.max(far && !overEnd ? low : high, floor),
     far,
     kind: none ? "none" : allFailed(estimate) ? "all" : "some",
-    words: none ? `none seen: rarer than ${oneIn(high)}` : oneInCell(estimate),
+    words,
     tip: markWords(
       `${name}: ${estimateSentence(estimate)} (${probabilityText(low)} to ${probabilityText(high)})`,
       state,
