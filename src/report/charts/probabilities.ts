@@ -74,22 +74,25 @@ export function probabilityChart(result: AssessResult): Chart {
 /** Pixels between the names and the end of the axis, near enough. */
 const axisRoom = chartWidth - 150;
 
+const places = ["right", "left", "above"] as const;
+type Place = (typeof places)[number];
+
 function rowOf(name: string, state: string, estimate: Estimate, floor: number): Record<string, unknown> {
   const none = noneSeen(estimate);
   const [low, high] = estimate.interval;
   const words = none ? `none seen: rarer than ${oneIn(high)}` : oneInCell(estimate);
-  // Words stand right of their bar; left of it, or over its end, where the axis ends too soon.
+  // Words stand right of their bar; left of it, or above its end, where the axis ends too soon.
   const pixels = (p: number): number => axisRoom * (1 - Math.log10(Math.max(p, floor)) / Math.log10(floor));
   const room = textWidth(words, 13) * 1.08 + 14;
   const far = pixels(high) + room > axisRoom + 20;
-  const overEnd = pixels(low) < room;
+  const place: Place = !far ? "right" : pixels(low) < room ? "above" : "left";
   return {
     name,
     probability: none ? null : Math.max(estimate.probability, floor),
     low: Math.max(low, floor),
     high: Math.max(high, floor),
-    end: Math.max(far && !overEnd ? low : high, floor),
-    far,
+    end: Math.max(place === "left" ? low : high, floor),
+    place,
     kind: none ? "none" : allFailed(estimate) ? "all" : "some",
     words,
     tip: markWords(
@@ -101,12 +104,13 @@ function rowOf(name: string, state: string, estimate: Estimate, floor: number): 
 
 function rowLayers(): readonly object[] {
   const tip = { field: "tip" };
-  const words = (far: boolean, halo: boolean): object => ({
-    transform: [{ filter: far ? "datum.far" : "!datum.far" }],
+  const words = (place: Place, halo: boolean): object => ({
+    transform: [{ filter: `datum.place === '${place}'` }],
     mark: {
       type: "text",
-      align: far ? "right" : "left",
-      dx: far ? -12 : 12,
+      align: place === "right" ? "left" : "right",
+      dx: place === "right" ? 12 : place === "left" ? -12 : 0,
+      dy: place === "above" ? -14 : 0,
       fontSize: 13,
       fontWeight: 600,
       aria: false,
@@ -129,7 +133,7 @@ function rowLayers(): readonly object[] {
       mark: { type: "tick", color: palette.main, thickness: 2.5, size: 18 },
       encoding: { x: { field: "high" }, description: tip },
     },
-    ...[false, true].flatMap((far) => [words(far, true), words(far, false)]),
+    ...places.flatMap((place) => [words(place, true), words(place, false)]),
   ];
 }
 
