@@ -16,7 +16,7 @@ const above: Readonly<Record<string, readonly string[]>> = {
 };
 
 /** Top-level files that every room may use. */
-const shared = ["errors.ts", "results.ts", "cautions.ts", "version.ts"];
+const shared = ["errors.ts", "results.ts", "results-size.ts", "results-decision.ts", "cautions.ts", "version.ts"];
 /** Rooms that may start the bridges (model, assess, check, …). */
 const outermost = ["parallel", "cli"];
 /** Rooms that may touch the machine. */
