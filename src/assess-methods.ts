@@ -2,15 +2,14 @@
 import type { Model } from "./model.ts";
 import { unknownsOf } from "./model.ts";
 import { normalUpperQuantile } from "./numeric/normal.ts";
-import { marginalOf } from "./probability/marginal-of.ts";
-import type { Remade } from "./probability/moved-marginal.ts";
+import { remadeMarginal } from "./probability/remade-marginal.ts";
 import { type BestOfMethods, bestEstimate } from "./reliability/best-estimate.ts";
 import { type DesignPointSearch, evaluationsOf } from "./reliability/design-points.ts";
 import { firstOrderResult, type RemadeAt, refined } from "./reliability/first-order.ts";
 import type { SamplingEstimate, SamplingMethod } from "./reliability/sampling-estimate.ts";
 import { curvaturesAt, secondOrder } from "./reliability/second-order.ts";
 import type { BestEstimate, FirstOrderResult, SecondOrderResult, SystemAssessment } from "./results.ts";
-import type { Distribution, Study } from "./study/study.ts";
+import type { Study } from "./study/study.ts";
 
 /** First and, where the design point is smooth, second order, for one limit state. */
 export function pointMethods(
@@ -44,26 +43,13 @@ function secondOrderOf(model: Model, search: DesignPointSearch, state: number): 
 }
 
 /** The marginals of a model's unknowns with other means and standard deviations, where their distribution is given by these. */
-function remadeAt({ study, kernel, space }: Model): RemadeAt {
+export function remadeAt({ study, kernel, space }: Model): RemadeAt {
   const distributions = new Map(unknownsOf(study, kernel).map(({ path, quantity }) => [path, quantity.distribution]));
   return (place) => {
     const { path } = space.unknowns[place];
     const distribution = distributions.get(path);
-    return distribution === undefined ? undefined : remade(distribution);
+    return distribution === undefined ? undefined : remadeMarginal(distribution);
   };
-}
-
-function remade(distribution: Distribution): Remade | undefined {
-  switch (distribution.kind) {
-    case "normal":
-    case "lognormal":
-    case "gumbel":
-    case "gamma":
-    case "beta":
-      return (mean, sd) => marginalOf({ ...distribution, mean, sd });
-    default:
-      return undefined;
-  }
 }
 
 export interface BestEstimateOptions {

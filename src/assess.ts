@@ -1,4 +1,5 @@
 /** How likely is each failure, how sure are we, and which unknown drives it? */
+import { withAllMeasures } from "./assess-all.ts";
 import { bestEstimateOf, plainEstimate, pointMethods } from "./assess-methods.ts";
 import { cautions } from "./cautions.ts";
 import { cautiousValues, driverTable } from "./drivers/driver-table.ts";
@@ -45,6 +46,8 @@ export interface AssessOptions {
   readonly precision?: number;
   /** Of the best estimate; chosen by the program where left out. */
   readonly method?: SamplingMethod;
+  /** Every method and measure: hand methods, all drivers, fragility. */
+  readonly all?: boolean;
   readonly onProgress?: (done: number, of: number) => void;
   readonly signal?: AbortSignal;
   /** Counts blocks elsewhere, on workers; in this thread where absent. */
@@ -81,7 +84,7 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
   const period = await periodOf(model, seed, options, run.complete);
   const goOn = run.complete && (period?.complete ?? true) && options.signal?.aborted !== true;
   const search = goOn ? findDesignPoints(states, space, seed) : undefined;
-  const limitStates = Object.fromEntries(
+  const assessed = Object.fromEntries(
     states.names.map((name, k) => [
       name,
       {
@@ -90,7 +93,11 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
       },
     ]),
   ) as Partial<Record<LimitStateName, LimitStateAssessment>>;
-  const system = systemAssessment(model, run, limitStates, period);
+  const whole = systemAssessment(model, run, assessed, period);
+  const { limitStates, system } =
+    search === undefined || options.all !== true
+      ? { limitStates: assessed, system: whole }
+      : withAllMeasures(model, assessed, whole, { seed, search, correlation: correlationOf(study, model) });
   const bestEstimate =
     search === undefined
       ? plainEstimate(study, system)
@@ -170,15 +177,21 @@ function systemAssessment(
   period: PeriodResult | undefined,
 ): SystemAssessment {
   const picture = failurePicture(model.space, run.system);
-  const each = Object.values(limitStates).map((state) => state.monteCarlo.probability);
   return {
     monteCarlo: monteCarloResult(run, run.system),
     ...(period === undefined ? {} : { period: periodAssessment(period) }),
-    bounds: systemBounds(each),
+    bounds: systemBounds(Object.values(limitStates).map(probabilityInHand)),
     drivers: driverTable(model.space, { picture }),
     failurePicture: picture,
     convergence: run.system.convergence,
   };
+}
+
+/** Counted where enough failures were seen; else that of the design point, if there is one. */
+function probabilityInHand(state: LimitStateAssessment): number {
+  const { probability, failures } = state.monteCarlo;
+  if (failures >= 30) return probability;
+  return state.secondOrderReliability?.probability ?? state.firstOrderReliability?.probability ?? probability;
 }
 
 /** Where something in the study is yearly, whole periods are drawn too. */

@@ -17,6 +17,7 @@ export { resultJson, resultTree } from "./report/result-json.ts";
 export { terminalAssess } from "./report/terminal-assess.ts";
 export { terminalCheck } from "./report/terminal-check.ts";
 export type * from "./results.ts";
+export type * from "./results-methods.ts";
 export { studyJsonSchema } from "./study/json-schema.ts";
 // reading
 export { readStudy, studyWith } from "./study/read-study.ts";

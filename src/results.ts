@@ -2,6 +2,7 @@
  * Shapes of the results, as every room and the public door see them. House units, angles in degrees. In the result file
  * (`--json`) the same keys appear in snake_case; keys that are paths (they hold a dot) and limit state names stay as they are.
  */
+import type { AllDrivers, FragilityCurve, HandMethods, SystemFromDesignPoints } from "./results-methods.ts";
 import type { LimitStateName, Notice, Study } from "./study/study.ts";
 
 export interface ResultBase {
@@ -263,6 +264,9 @@ export interface LimitStateAssessment {
   readonly firstOrderSecondMoment: SecondMomentResult;
   readonly firstOrderReliability?: FirstOrderResult;
   readonly secondOrderReliability?: SecondOrderResult;
+  /** Only where every measure was asked for, as the next. */
+  readonly handMethods?: HandMethods;
+  readonly allDrivers?: AllDrivers;
   readonly drivers: readonly Driver[];
   readonly tornado: readonly TornadoBar[];
   readonly failurePicture: readonly FailurePicture[];
@@ -290,6 +294,10 @@ export interface SystemAssessment {
   readonly drivers: readonly Driver[];
   readonly failurePicture: readonly FailurePicture[];
   readonly convergence: readonly ConvergencePoint[];
+  /** Only where every measure was asked for, as the next. */
+  readonly fromDesignPoints?: SystemFromDesignPoints;
+  /** Probability of the system as a function of its strongest unknowns, one at a time. */
+  readonly fragility?: readonly FragilityCurve[];
 }
 
 export interface BestEstimate {

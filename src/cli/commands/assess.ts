@@ -47,7 +47,11 @@ function assessJob(options: Options, io: Io): Job<AssessResult> {
 }
 
 /** Assesses with progress on a terminal and a stop by Ctrl-C that keeps what was computed. */
-export async function runAssess({ study, text }: StudyInput, options: SamplingOptions, io: Io): Promise<AssessResult> {
+export async function runAssess(
+  { study, text }: StudyInput,
+  options: SamplingOptions & { readonly all?: boolean },
+  io: Io,
+): Promise<AssessResult> {
   const { assess } = await import("../../assess.ts");
   const { workersFor } = await import("../../parallel/worker-count.ts");
   const workers = options.workers ?? workersFor(study, options.samples ?? study.assessment.samples);
@@ -61,6 +65,7 @@ export async function runAssess({ study, text }: StudyInput, options: SamplingOp
       ...(options.method === undefined ? {} : { method: options.method }),
       ...(runner === undefined ? {} : { startRunner: (of, plan) => runner.workerRunner(of, plan, workers) }),
       workers,
+      ...(options.all === true ? { all: true } : {}),
       signal: io.signal,
       clock: io.clock,
       onProgress: (done, of) => progress.update(done, of),

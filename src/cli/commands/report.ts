@@ -25,8 +25,15 @@ export function addReport(program: Command, io: Io, end: (code: number) => void)
       const { check } = await import("../../check.ts");
       const { htmlReport } = await import("../../report/html-report.ts");
       const checked = withText(input.text, () => check(input.study), input.study.file);
-      const assessed = await runAssess(input, options, io);
-      const page = await htmlReport({ study: input.study, check: checked, assess: assessed });
+      const assessed = await runAssess(input, { ...options, all: true }, io);
+      const { failurePoint } = await import("../../report/failure-point.ts");
+      const point = failurePoint(assessed);
+      const page = await htmlReport({
+        study: input.study,
+        check: checked,
+        assess: assessed,
+        ...(point === undefined ? {} : { atFailure: check(input.study, { at: point }) }),
+      });
       if (target === "-") io.out(page);
       else {
         await writeOutput(target, page, [file]);
