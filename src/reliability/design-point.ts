@@ -28,8 +28,8 @@ interface Linearisation {
 }
 
 const difference = 1e-5;
-const stepTolerance = 1e-5;
-const marginTolerance = 1e-8;
+const stepTolerance = 1e-4;
+const marginTolerance = 1e-7;
 const longestStep = 4;
 const patience = 12;
 const mostIterations = 60;
@@ -84,14 +84,16 @@ export function searchDesignPoint(
     if (lastStep <= stepTolerance * Math.max(1, norm(z)) && onSurface) {
       const held = aim.holders.length > 1 || aim.heldBySide;
       const onward: Point | undefined = held ? nearerFailure(margins, aim, sides) : undefined;
-      if (onward === undefined) return ended(aim.point, held ? "corner" : "smooth");
+      if (onward === undefined)
+        return ended(aim.point, held && !isSmooth(margins, segments, aim.point) ? "corner" : "smooth");
       stalled = false;
       bundle = [];
       z = onward;
       [margin] = margins([z]);
       continue;
     }
-    if (norm(z) > farthest || known.some((point) => near(point, z))) return ended(z, "none");
+    const heading = lastStep < 2 ? [z, aim.point] : [z];
+    if (norm(z) > farthest || known.some((point) => heading.some((at) => near(point, at)))) return ended(z, "none");
     const reachable = lastStep > longestStep ? between(z, aim.point, longestStep / lastStep) : aim.point;
     const next: Step = descend(margins, z, margin, gradient, reachable);
     stalled ||= next.stalled;
@@ -110,6 +112,24 @@ export function searchDesignPoint(
     z.map((value, i) => value - (margin * gradient[i]) / dot(gradient, gradient)),
     "smooth",
   );
+}
+
+/**
+ * Whether a point that several linearisations hold is smooth after all, its surface only sharply bent: differences to both sides
+ * agree and point at the origin.
+ */
+function isSmooth(margins: Margins, segments: Segments, z: Point): boolean {
+  const [margin] = margins([z]);
+  const segment = segments.of(z).join();
+  const step = 1e-4;
+  const moved = Array.from(z, (_, j) => j).flatMap((j) =>
+    [step, -step].map((move) => z.map((value, i) => (i === j ? value + move : value))),
+  );
+  if (moved.some((point) => segments.of(point).join() !== segment)) return false;
+  const values = margins(moved);
+  const gradient = z.map((_, j) => (values[2 * j] - values[2 * j + 1]) / (2 * step));
+  const bend = z.map((_, j) => (values[2 * j] + values[2 * j + 1] - 2 * margin) / step);
+  return norm(bend) < 0.05 * norm(gradient) && cosine(z, gradient) < -0.999;
 }
 
 /** Whether two points lie in the same region, for all that a search needs to know. */
@@ -205,13 +225,18 @@ function descend(margins: Margins, z: Point, margin: number, gradient: Point, ai
   const before = merit(z, margin);
   const direction = aim.map((value, i) => value - z[i]);
   const slope = dot(z, direction) - penalty * Math.abs(margin);
-  const shares = [1, 0.5, 0.2, 0.05];
+  const goodEnough = (trial: Point, value: number, share: number): boolean =>
+    merit(trial, value) <= before + 0.1 * share * Math.min(slope, 0);
+  // most steps are good at their full length: the shorter ones are tried only after it, all at once
+  const [full] = margins([aim]);
+  if (goodEnough(aim, full, 1)) return { point: aim, margin: full, stalled: false };
+  const shares = [0.5, 0.2, 0.05];
   const trials = shares.map((share) => between(z, aim, share));
   const values = margins(trials);
+  const enough = trials.findIndex((trial, i) => goodEnough(trial, values[i], shares[i]));
   const merits = trials.map((trial, i) => merit(trial, values[i]));
-  const enough = merits.findIndex((value, i) => value <= before + 0.1 * shares[i] * Math.min(slope, 0));
   const best = enough >= 0 ? enough : merits.indexOf(Math.min(...merits));
-  return { point: trials[best], margin: values[best], stalled: best > 0 };
+  return { point: trials[best], margin: values[best], stalled: true };
 }
 
 /**

@@ -25,8 +25,8 @@ test("parabola: both design points, for every seed, and the probability around t
       expect.closeTo(3.094258, 5),
     ]);
     const expected = [
-      [-2.741, 0.965],
-      [2.916, 1.036],
+      [-2.740845, 0.964799],
+      [2.915843, 1.035513],
     ];
     points.forEach(({ point }, i) => {
       for (const j of [0, 1]) expect(Math.abs(point[j] - expected[i][j])).toBeLessThan(5e-4);
