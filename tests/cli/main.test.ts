@@ -4,7 +4,30 @@ import { describe, expect, test } from "vitest";
 import { version } from "../../src/version.ts";
 import { newFolder, runWith, yard } from "./fake-io.ts";
 
+/** The commands that the help lists. */
+async function commandNames(): Promise<readonly string[]> {
+  const { out } = await runWith(["--help"]);
+  return [...out.slice(out.indexOf("Commands:")).matchAll(/^ {2}(\w+) \[options\]/gm)].map(([, name]) => name);
+}
+
 describe("the command line", () => {
+  test("has the commands of the format page", async () => {
+    expect(await commandNames()).toEqual(
+      expect.arrayContaining(["check", "assess", "size", "report", "schema", "new"]),
+    );
+  });
+
+  test("every command takes what every command takes", async () => {
+    for (const name of await commandNames()) {
+      const { out } = await runWith([name, "--help"]);
+      for (const option of ["-o, --output", "--quiet", ...(name === "completion" ? [] : ["--json"])])
+        expect(out, name).toContain(option);
+      if (/<study>/.test(out)) expect(out, name).toContain("--set <path=value>");
+      if (out.includes("--seed"))
+        for (const option of ["--samples", "--precision", "--workers", "--method"]) expect(out, name).toContain(option);
+    }
+  });
+
   test.each([
     [["check"], "missing required argument 'study'"],
     [["chekc", yard], "unknown command 'chekc'\n(Did you mean check?)"],
@@ -36,7 +59,7 @@ describe("the command line", () => {
   test("--version and help end with 0 on standard output; every command's help has examples", async () => {
     expect(await runWith(["--version"])).toEqual({ code: 0, out: `${version}\n`, err: "" });
     expect(await runWith(["--help"])).toMatchObject({ code: 0, err: "" });
-    for (const name of ["check", "assess", "report", "schema", "new", "completion"]) {
+    for (const name of await commandNames()) {
       const help = await runWith([name, "--help"]);
       expect(help).toMatchObject({ code: 0, err: "" });
       expect(help.out).toMatch(/Examples?:\n {2}toehold /);
