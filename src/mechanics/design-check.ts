@@ -12,8 +12,8 @@
  * A force has one factor, for all of it and its moments, since it has one cause. Whether it is unfavourable is judged for each
  * limit state: in sliding by H − V tan δ, in overturning by its moment about the toe. Vertical forces may be unfavourable to
  * bearing and eccentricity either way; so both are tried, weights unfavourable and weights favourable, and the smaller ratio
- * counts. Under sloping ground with cohesion the pressure is not linear in the load, and the surcharge stays in the earth thrust:
- * it takes the permanent factor there. In bearing and eccentricity the horizontal forces towards the front are unfavourable, those against it favourable.
+ * counts; horizontal forces towards the front are unfavourable there, those against it favourable. Under sloping ground with
+ * cohesion the pressure is not linear in the load: the surcharge stays in the earth thrust and takes the permanent factor.
  */
 import type { CheckResult, Force, LimitStateCheck } from "../results.ts";
 import type { LimitStateName } from "../study/study.ts";
