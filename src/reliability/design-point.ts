@@ -85,7 +85,7 @@ export function searchDesignPoint(
       const held = aim.holders.length > 1 || aim.heldBySide;
       const onward: Point | undefined = held ? nearerFailure(margins, aim, sides) : undefined;
       if (onward === undefined)
-        return ended(aim.point, held && !isSmooth(margins, segments, aim.point) ? "corner" : "smooth");
+        return ended(aim.point, held && (aim.heldBySide || !isSmooth(margins, aim.point)) ? "corner" : "smooth");
       stalled = false;
       bundle = [];
       z = onward;
@@ -114,22 +114,16 @@ export function searchDesignPoint(
   );
 }
 
-/**
- * Whether a point that several linearisations hold is smooth after all, its surface only sharply bent: differences to both sides
- * agree and point at the origin.
- */
-function isSmooth(margins: Margins, segments: Segments, z: Point): boolean {
-  const [margin] = margins([z]);
-  const segment = segments.of(z).join();
+/** Whether the surface is smooth at a point: differences to both sides agree, and point at the origin. 2 d + 1 evaluations. */
+export function isSmooth(margins: Margins, z: Point): boolean {
   const step = 1e-4;
   const moved = Array.from(z, (_, j) => j).flatMap((j) =>
     [step, -step].map((move) => z.map((value, i) => (i === j ? value + move : value))),
   );
-  if (moved.some((point) => segments.of(point).join() !== segment)) return false;
-  const values = margins(moved);
+  const [margin, ...values] = margins([z, ...moved]);
   const gradient = z.map((_, j) => (values[2 * j] - values[2 * j + 1]) / (2 * step));
   const bend = z.map((_, j) => (values[2 * j] + values[2 * j + 1] - 2 * margin) / step);
-  return norm(bend) < 0.05 * norm(gradient) && cosine(z, gradient) < -0.999;
+  return norm(bend) < 0.05 * norm(gradient) && Math.abs(cosine(z, gradient)) > 0.999;
 }
 
 /** Whether two points lie in the same region, for all that a search needs to know. */

@@ -3,7 +3,7 @@ import { normalCdf } from "../numeric/normal.ts";
 import type { JointSpace } from "../probability/marginal.ts";
 import { movementsOf, type Remade, stretchAt } from "../probability/moved-marginal.ts";
 import type { FirstOrderResult } from "../results.ts";
-import { refineSmoothPoint } from "./design-point.ts";
+import { isSmooth, refineSmoothPoint } from "./design-point.ts";
 import { type DesignPoint, evaluationsOf, type StateSearch } from "./design-points.ts";
 import type { LimitStates } from "./limit-states.ts";
 import { dot, norm, type Point, pointEvaluator, scaled } from "./point-evaluator.ts";
@@ -57,12 +57,15 @@ export function firstOrderResult(
   };
 }
 
-/** The points with the nearest one, where it is smooth, to more digits. */
+/** The points with the nearest one, where it is smooth, to more digits; a kink that the search did not feel makes it a corner. */
 export function refined(states: LimitStates, points: readonly DesignPoint[]): readonly DesignPoint[] {
   const [nearest, ...others] = points;
   if (nearest?.status !== "smooth") return points;
   const evaluator = pointEvaluator(states);
-  const better = refineSmoothPoint((trials) => evaluator.margins(nearest.state, trials), nearest);
+  const margins = (trials: readonly Point[]): Float64Array => evaluator.margins(nearest.state, trials);
+  if (norm(nearest.point) > 1e-3 && !isSmooth(margins, nearest.point))
+    return [{ ...nearest, status: "corner" }, ...others];
+  const better = refineSmoothPoint(margins, nearest);
   const sign = Math.sign(nearest.reliabilityIndex);
   return [{ ...nearest, ...better, reliabilityIndex: sign * norm(better.point) }, ...others];
 }
