@@ -44,6 +44,10 @@ interface DriveTables {
   /** Absent for a normal marginal: a line needs no table. */
   readonly column?: Tabulated;
   readonly coefficients: readonly { readonly table: Tabulated; readonly into: Float64Array }[];
+  /** Coefficients that are straight lines of the column, such as a weight: constant + slope·x. */
+  readonly lines: readonly { readonly constant: number; readonly slope: number; readonly into: Float64Array }[];
+  /** u at the ends of the physical range; infinite where no sample can stray. */
+  readonly ends: readonly [number, number];
   /** Coefficients with a kink within reach, or of a column that is the same for all: by their formula. */
   readonly byFormula: readonly { readonly value: (x: number) => number; readonly into: Float64Array }[];
 }
@@ -177,20 +181,46 @@ function makeTables(drive: Drive, columns: Columns): DriveTables {
   const { marginal, input } = drive;
   const x = standInOf(marginal);
   const held = (u: number): number => input.scale * Math.min(Math.max(x(u), input.lowest), input.highest);
-  const ends = drive.strays ? [marginal.normalOfQuantile(input.lowest), marginal.normalOfQuantile(input.highest)] : [];
+  const ends: [number, number] = drive.strays
+    ? [marginal.normalOfQuantile(input.lowest), marginal.normalOfQuantile(input.highest)]
+    : [Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
   const breaks = { kinks: [...marginal.kinks, ...ends].filter(Number.isFinite), jumps: marginal.jumps };
   const reach = [held(-tableReach), held(tableReach)];
   const smooth = (coefficient: Coefficient): boolean =>
     !coefficient.kinks.some((kink) => kink >= reach[0] && kink <= reach[1]);
+  const lines = drive.coefficients.flatMap(({ value, into }) => {
+    const line = lineOf(value, reach[0], reach[1]);
+    return line === undefined ? [] : [{ ...line, slot: into, into: columns[into] }];
+  });
+  const straight = new Set(lines.map(({ slot }) => slot));
   return {
+    ends,
+    lines,
     ...(marginal.kind === "normal" ? {} : { column: tabulate(held, breaks) }),
     coefficients: drive.coefficients
-      .filter(smooth)
+      .filter((coefficient) => smooth(coefficient) && !straight.has(coefficient.into))
       .map(({ value, into }) => ({ table: tabulate((u) => value(held(u)), breaks), into: columns[into] })),
     byFormula: drive.coefficients
-      .filter((coefficient) => !smooth(coefficient))
+      .filter((coefficient) => !smooth(coefficient) && !straight.has(coefficient.into))
       .map(({ value, into }) => ({ value, into: columns[into] })),
   };
+}
+
+/** The line that a function is, to rounding, at points all over a range; undefined where it is none. */
+function lineOf(
+  value: (x: number) => number,
+  from: number,
+  to: number,
+): { readonly constant: number; readonly slope: number } | undefined {
+  const [first, last] = [value(from), value(to)];
+  const slope = (last - first) / (to - from);
+  const constant = first - slope * from;
+  const size = Math.max(Math.abs(first), Math.abs(last), Math.abs(constant));
+  for (let k = 1; k < 64; k++) {
+    const x = from + ((to - from) * k) / 64;
+    if (!(Math.abs(value(x) - (constant + slope * x)) <= 1e-13 * size)) return undefined;
+  }
+  return Number.isFinite(slope) ? { constant, slope } : undefined;
 }
 
 function fillFromTables(
@@ -204,7 +234,7 @@ function fillFromTables(
   const { column, marginal, input } = drive;
   const tabulated = tables.coefficients;
   if (tables.column !== undefined || tabulated.length > 0) locate(u, n, noBrokenCells, location);
-  if (drive.strays) markStrays(drive, u, n, strayed);
+  if (drive.strays) markStrays(tables.ends, u, n, strayed);
   if (tables.column === undefined) {
     const { mean, sd } = marginal;
     const { lowest, highest, scale } = input;
@@ -214,6 +244,10 @@ function fillFromTables(
     const { table, into } = tabulated[k];
     lookUp(table.cubics, location, u, n, table.standIn, into);
   }
+  for (let k = 0; k < tables.lines.length; k++) {
+    const { constant, slope, into } = tables.lines[k];
+    for (let i = 0; i < n; i++) into[i] = constant + slope * column[i];
+  }
   for (let k = 0; k < tables.byFormula.length; k++) {
     const { value, into } = tables.byFormula[k];
     for (let i = 0; i < n; i++) into[i] = value(column[i]);
@@ -221,8 +255,6 @@ function fillFromTables(
 }
 
 /** Marks the samples beyond the physical range, found in u: the column itself is held to the range already. */
-function markStrays(drive: Drive, u: Float64Array, n: number, strayed: Uint8Array): void {
-  const low = drive.marginal.normalOfQuantile(drive.input.lowest);
-  const high = drive.marginal.normalOfQuantile(drive.input.highest);
+function markStrays([low, high]: readonly [number, number], u: Float64Array, n: number, strayed: Uint8Array): void {
   for (let i = 0; i < n; i++) if (u[i] < low || u[i] > high) strayed[i] |= mark.outOfRange;
 }
