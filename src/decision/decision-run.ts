@@ -62,7 +62,7 @@ export function runDecision(problem: DecisionProblem, search: CentreSearch, sett
   evaluations += beliefs.evaluations;
   const first = decisionBasis(problem, pilot, beliefs);
   const samples = Math.min(
-    Math.max(sizeFor(first, centres, pilot.drawn, settings.precision), 2 * pilotSize),
+    Math.max(sizeFor(first, centres, pilot.drawn, settings.precision), 4 * pilotSize),
     settings.most,
   );
   const basis = decisionBasis(problem, draw(samples, "decision"), beliefs);
