@@ -15,8 +15,11 @@ const above: Readonly<Record<string, readonly string[]>> = {
   cli: ["study", "mechanics", "probability", "reliability", "drivers", "decision", "report", "parallel"],
 };
 
-/** Top-level files that every room may use. */
-const shared = ["errors.ts", "results.ts", "results-size.ts", "results-decision.ts", "cautions.ts", "version.ts"];
+/** Top-level files that every room may use; results-*.ts, shapes of results, too. */
+const shared = ["errors.ts", "cautions.ts", "version.ts"];
+
+/** A file of shapes of results: types alone, for every room. */
+export const isResultShapes = (file: string): boolean => /^results(-[a-z]+)*\.ts$/.test(file);
 /** Rooms that may start the bridges (model, assess, check, …). */
 const outermost = ["parallel", "cli"];
 /** Rooms that may touch the machine. */
@@ -71,7 +74,7 @@ function faultOf(file: string, room: string, target: string): string | undefined
   const toRoom = roomOf(to);
   if (room === "" || toRoom === room || toRoom === "numeric") return undefined;
   if (toRoom === "")
-    return shared.includes(to) || outermost.includes(room)
+    return shared.includes(to) || isResultShapes(to) || outermost.includes(room)
       ? undefined
       : `${file}: imports ${to}, a bridge above its room`;
   if (above[room] === undefined) return `${file}: lies in ${room}/, a room that the rules do not know`;

@@ -51,6 +51,7 @@ describe("the rooms of the source", () => {
       { file: "mechanics/a.ts", text: 'import type { Study } from "../study/study.ts"; // process.env is for cli' },
       { file: "drivers/a.ts", text: 'import { normalCdf } from "../numeric/normal.ts";' },
       { file: "report/a.ts", text: 'import type { CheckResult } from "../results.ts";' },
+      { file: "report/a.ts", text: 'import type { SizeResult } from "../results-size.ts";' },
       {
         file: "cli/a.ts",
         text: 'import { assess } from "../assess.ts"; import { readFile } from "node:fs/promises"; process.exit(0);',
