@@ -149,14 +149,26 @@ export function wallStates(
   };
 }
 
-/** u = row · z, zeros left out. */
+/** u = row · z, zeros left out; two coordinates to a pass. */
 function combine(drive: Drive, z: Columns, u: Float64Array, n: number): void {
   const { coordinates, weights } = drive;
-  const [first, weight] = [z[coordinates[0]], weights[0]];
-  for (let i = 0; i < n; i++) u[i] = weight * first[i];
-  for (let k = 1; k < coordinates.length; k++) {
-    const [column, share] = [z[coordinates[k]], weights[k]];
-    for (let i = 0; i < n; i++) u[i] += share * column[i];
+  const first = z[coordinates[0]];
+  const weight = weights[0];
+  if (coordinates.length === 1) for (let i = 0; i < n; i++) u[i] = weight * first[i];
+  else {
+    const second = z[coordinates[1]];
+    const share = weights[1];
+    for (let i = 0; i < n; i++) u[i] = weight * first[i] + share * second[i];
+  }
+  for (let k = 2; k < coordinates.length; k += 2) {
+    const third = z[coordinates[k]];
+    const share = weights[k];
+    if (k + 1 === coordinates.length) for (let i = 0; i < n; i++) u[i] += share * third[i];
+    else {
+      const fourth = z[coordinates[k + 1]];
+      const other = weights[k + 1];
+      for (let i = 0; i < n; i++) u[i] = u[i] + share * third[i] + other * fourth[i];
+    }
   }
 }
 

@@ -1,4 +1,5 @@
 import type { JointSpace } from "../probability/marginal.ts";
+import { standInOf } from "../probability/marginal-table.ts";
 import { fillNormals, streamBlock } from "../probability/streams.ts";
 import type { Columns, LimitStates } from "./limit-states.ts";
 
@@ -71,6 +72,7 @@ export function createBlockCounter(states: LimitStates, space: JointSpace, plan:
   const factors = names.map(() => new Float64Array(capacity));
   const marks = new Uint8Array(capacity);
   const failed = new Uint8Array(capacity);
+  const point = createFailurePoint(space);
   return {
     tally(block) {
       const samples = Math.min(streamBlock, plan.samples - block * streamBlock);
@@ -86,7 +88,7 @@ export function createBlockCounter(states: LimitStates, space: JointSpace, plan:
         for (let k = 0; k < names.length; k++)
           countState(factors[k], n, marks, failed, tally.states[k], plan.centres[k], plan.edges[k]);
         countSystem(failed, marks, n, tally.system);
-        drawPictures(tiles[tile], factors, failed, n, space, tally);
+        drawPictures(tiles[tile], factors, failed, n, point, tally);
       }
       return tally;
     },
@@ -156,39 +158,67 @@ function countSystem(failed: Uint8Array, marks: Uint8Array, n: number, system: S
   system.stableFailures += stable;
 }
 
-/** x of the unknowns at the first failures of the block, for each limit state and the system. */
+/**
+ * x of the unknowns at the first failures of the block, for each limit state and the system. A sample that several of them
+ * want is looked at once.
+ */
 function drawPictures(
   z: Columns,
   factors: Columns,
   failed: Uint8Array,
   n: number,
-  space: JointSpace,
+  point: FailurePoint,
   tally: BlockTally,
 ): void {
   const last = factors.length;
+  const full = (k: number): boolean => (k < last ? tally.states[k] : tally.system).picture.failures >= picturesPerBlock;
+  const open = Array.from({ length: last + 1 }, (_, k) => k).filter((k) => !full(k));
+  if (open.length === 0) return;
   for (let i = 0; i < n; i++) {
     if (failed[i] === 0) continue;
-    for (let k = 0; k <= last; k++) {
+    let known = false;
+    for (const k of open) {
       const { picture } = k < last ? tally.states[k] : tally.system;
       if (picture.failures >= picturesPerBlock || (k < last && !(factors[k][i] < 1))) continue;
-      picture.failures++;
-      addToPicture(picture, z, i, space);
+      if (!known) point.lookAt(z, i);
+      known = true;
+      addToPicture(picture, point);
     }
   }
 }
 
-function addToPicture(picture: PictureTally, z: Columns, i: number, space: JointSpace): void {
-  const { unknowns, rows } = space;
-  for (let v = 0; v < unknowns.length; v++) {
-    const row = rows[v];
-    let u = 0;
-    for (let j = 0; j < row.length; j++) if (row[j] !== 0) u += row[j] * z[j][i];
-    const { marginal } = unknowns[v];
-    const off = marginal.quantileOfNormal(u) - marginal.mean;
-    picture.sums[v] += off;
-    picture.squares[v] += off * off;
-    const bin = Math.floor((u - pictureEdges[0]) * 4);
-    picture.bins[v][Math.min(Math.max(bin, 0), pictureBins - 1)]++;
+/** Distance from the mean, and bin of u, of every unknown at one sample. */
+interface FailurePoint {
+  readonly off: Float64Array;
+  readonly bin: Int32Array;
+  lookAt(z: Columns, i: number): void;
+}
+
+function createFailurePoint({ unknowns, rows }: JointSpace): FailurePoint {
+  const off = new Float64Array(unknowns.length);
+  const bin = new Int32Array(unknowns.length);
+  const quantiles = unknowns.map(({ marginal }) => standInOf(marginal));
+  return {
+    off,
+    bin,
+    lookAt(z, i) {
+      for (let v = 0; v < unknowns.length; v++) {
+        const row = rows[v];
+        let u = 0;
+        for (let j = 0; j < row.length; j++) if (row[j] !== 0) u += row[j] * z[j][i];
+        off[v] = quantiles[v](u) - unknowns[v].marginal.mean;
+        bin[v] = Math.min(Math.max(Math.floor((u - pictureEdges[0]) * 4), 0), pictureBins - 1);
+      }
+    },
+  };
+}
+
+function addToPicture(picture: PictureTally, { off, bin }: FailurePoint): void {
+  picture.failures++;
+  for (let v = 0; v < off.length; v++) {
+    picture.sums[v] += off[v];
+    picture.squares[v] += off[v] * off[v];
+    picture.bins[v][bin[v]]++;
   }
 }
 
