@@ -2,7 +2,7 @@
  * npm run bench: speed as ratios measured in one run, on the built package, each number the median of several fresh
  * processes taken in turn. Writes a table between the bench marks of README.md.
  *
- *   node tests/bench/bench.mjs [--rounds 5] [--long] [--no-write]
+ *   node tests/bench/bench.mjs [--rounds 5] [--quick | --long] [--no-write]
  */
 import { execFileSync, spawnSync } from "node:child_process";
 import { existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
@@ -18,6 +18,7 @@ const argument = (name, otherwise) => {
 };
 const rounds = Number(argument("--rounds", "5"));
 const long = process.argv.includes("--long");
+const quick = process.argv.includes("--quick");
 const launcher = join(root, "bin/toehold.mjs");
 if (!existsSync(join(root, "dist/index.js"))) throw new Error("run `npm run build` first");
 
@@ -179,7 +180,7 @@ table(
     figure(ns),
   ]),
 );
-const sizes = [1e5, 1e6, 1e7, 1e8, ...(long ? [1e9] : [])];
+const sizes = [1e5, 1e6, 1e7, ...(quick ? [] : [1e8]), ...(long ? [1e9] : [])];
 table(
   ["Samples", "seconds", "peak memory, MB", "heap after, MB"],
   sizes.map((samples) => {
