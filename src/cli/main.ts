@@ -7,13 +7,23 @@ import { addCompletion } from "./commands/completion.ts";
 import { addNew } from "./commands/new.ts";
 import { addReport } from "./commands/report.ts";
 import { addSchema } from "./commands/schema.ts";
+import { addScope } from "./commands/scope.ts";
 import { addSize } from "./commands/size.ts";
 import { internalErrorText, showFailure } from "./failure.ts";
 import { exitCode, type Io } from "./io.ts";
 import { processIo } from "./process-io.ts";
 
 /** In the order of the help; a new command is one line here and one file beside the others. */
-const commands: readonly AddCommand[] = [addCheck, addAssess, addSize, addReport, addSchema, addNew, addCompletion];
+const commands: readonly AddCommand[] = [
+  addCheck,
+  addAssess,
+  addScope,
+  addSize,
+  addReport,
+  addSchema,
+  addNew,
+  addCompletion,
+];
 
 /** Runs one command line and returns its exit code. Nothing here ends the process. */
 export async function run(args: readonly string[], io: Io): Promise<number> {
