@@ -15,6 +15,7 @@ import {
 import { sparkline } from "./sparkline.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
+import { measuresOfState, measuresOfSystem } from "./terminal-measures.ts";
 import {
   againstTarget,
   countedEstimate,
@@ -35,7 +36,10 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
     [probabilityTable(result, options)],
     [heading("What drives it", options), ...driversText(result, options)],
     ...(options.all
-      ? Object.entries(result.limitStates).map(([name, state]) => everything(name, state, result, options))
+      ? [
+          ...Object.entries(result.limitStates).map(([name, state]) => everything(name, state, result, options)),
+          ...[measuresOfSystem(result, display, options)].filter((lines) => lines.length > 0),
+        ]
       : []),
     [
       heading("What was put in", options),
@@ -132,6 +136,7 @@ function everything(
     ...paragraphLines(methodSentences(state), options),
     "",
     driverTable(state, result, options),
+    ...measuresOfState(state, result, options),
   ];
 }
 
@@ -155,7 +160,9 @@ function methodSentences(state: LimitStateAssessment): readonly string[] {
     ...(first === undefined
       ? []
       : [
-          `First-order reliability: ${both(first.reliabilityIndex, first.probability)}, ${first.converged ? first.status : `not converged (${first.status})`}.`,
+          first.status === "none"
+            ? "First-order reliability: no design point was found; nothing within reach fails."
+            : `First-order reliability: ${both(first.reliabilityIndex, first.probability)}, ${first.converged ? first.status : "not converged"}.`,
         ]),
     ...(second === undefined
       ? []

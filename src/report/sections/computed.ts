@@ -6,6 +6,7 @@ import { factorHistogram } from "../charts/factor-histogram.ts";
 import { limitStateName } from "../display.ts";
 import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
 import { grouped, indexText, intervalText, oneIn, probabilityText, significant } from "../number.ts";
+import { fromDesignPoints, handMethodsTable } from "./measures.ts";
 
 /** How the probabilities were computed: samples, histograms, methods side by side, convergence, what was counted. */
 export async function computedSection({ assess }: ReportInput): Promise<PageSection> {
@@ -24,6 +25,8 @@ export async function computedSection({ assess }: ReportInput): Promise<PageSect
     ...bestEstimateSentences(assess).map((sentence) => paragraph(sentence)),
     `<div class="trio">${histograms.join("")}</div>`,
     methodsTable(assess),
+    handMethodsTable(assess),
+    fromDesignPoints(assess),
     convergence.length > 1
       ? await chartFigure(convergenceChart(convergence), "The band is the 95 % interval at each stage of the run.")
       : paragraph("The run ended at its first look, so there is no course of the estimate to draw.", "quiet"),
@@ -65,7 +68,11 @@ function methodsTable({ limitStates }: AssessResult): string {
         "First-order reliability",
         first.reliabilityIndex,
         first.probability,
-        first.converged ? first.status : `not converged: ${first.status}`,
+        first.status === "none"
+          ? "no design point found: nothing within reach fails"
+          : first.converged
+            ? `${first.status} design point`
+            : "not converged",
       );
     if (second !== undefined) add("Second-order reliability", second.reliabilityIndex, second.probability, "");
   }

@@ -6,6 +6,7 @@ import { tornadoChart } from "../charts/tornado-chart.ts";
 import { type Display, limitStateName } from "../display.ts";
 import { type Cell, htmlTable, type PageSection, paragraph, section } from "../markup.ts";
 import { grouped, shareText, shiftText } from "../number.ts";
+import { fragilityTables, measuresOf } from "./measures.ts";
 
 /** Which unknown drives the risk: shares, one at a time, and what the failures look like. */
 export async function driversSection({ assess }: ReportInput, display: Display): Promise<PageSection> {
@@ -25,6 +26,8 @@ export async function driversSection({ assess }: ReportInput, display: Display):
     driverTable(assess, display),
     await pictures(assess, display),
     ...(await tornadoes(assess, display)),
+    measuresOf(assess),
+    fragilityTables(assess, display),
   );
 }
 
