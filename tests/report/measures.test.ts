@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { assess } from "../../src/assess.ts";
 import { displayIn } from "../../src/report/display.ts";
 import { handRows, probabilityPerSd } from "../../src/report/measures.ts";
+import { probabilityText } from "../../src/report/number.ts";
 import { fragilityTables, fromDesignPoints, handMethodsTable, measuresOf } from "../../src/report/sections/measures.ts";
 import { measuresOfState, measuresOfSystem } from "../../src/report/terminal-measures.ts";
 import type { LimitStateAssessment } from "../../src/results.ts";

@@ -14,7 +14,7 @@ describe("toehold scope", () => {
       "Six shear-box tests on the sand",
       "One borehole to 8 m",
       "Knowing all of them would be worth",
-      "the target governs",
+      "the target reliability governs",
       "Where the decision tips",
       "licensed engineer",
     ])
