@@ -24,7 +24,7 @@ export function measuresOfState(
               { heading: "Sd", align: "right" },
               { heading: "Index, normal", align: "right", spare: 2 },
               { heading: "Index, lognormal", align: "right", spare: 1 },
-              { heading: "p off by (n, ln)", align: "right" },
+              { heading: "p off by (n, ln)", align: "right", spare: 3 },
             ],
             rows,
             width,
@@ -41,8 +41,7 @@ function rankingOf(state: LimitStateAssessment, result: AssessResult, width: num
   const derivatives = new Map(drivers.derivatives.map((row) => [row.path, row]));
   const share = (value: number | null | undefined): string => (value == null ? "–" : shareText(value));
   const rows = drivers.ranking.map((row) => [
-    `${row.rank}`,
-    labels.get(row.path) ?? row.path,
+    `${row.rank}. ${labels.get(row.path) ?? row.path}`,
     share(row.importance),
     share(row.firstIndex),
     share(row.totalIndex),
@@ -53,9 +52,8 @@ function rankingOf(state: LimitStateAssessment, result: AssessResult, width: num
   ]);
   const table = textTable(
     [
-      { heading: "" },
       { heading: "Every measure" },
-      { heading: "At design point", align: "right" },
+      { heading: "At design point", align: "right", spare: 0 },
       { heading: "Index alone", align: "right", spare: 4 },
       { heading: "Index in all", align: "right", spare: 2 },
       { heading: "Rank corr.", align: "right", spare: 3 },
@@ -106,7 +104,7 @@ export function measuresOfSystem(result: AssessResult, display: Display, options
         [
           { heading: `${variable.label}` },
           { heading: "Probability of any failure", align: "right" },
-          { heading: "95 % interval", align: "right" },
+          { heading: "95 % interval", align: "right", spare: 1 },
         ],
         shown.map(({ value, probability, interval: [low, high] }) => [
           display.quantity(value, variable.unit),
