@@ -172,9 +172,17 @@ function combine(drive: Drive, z: Columns, u: Float64Array, n: number): void {
   }
 }
 
+/** A gradient moves one coordinate at a time: where u stands still from one point to the next, so does x. */
 function fillExactly(drive: Drive, u: Float64Array, n: number, strayed: Uint8Array): void {
   const { marginal, column } = drive;
-  for (let i = 0; i < n; i++) column[i] = marginal.quantileOfNormal(u[i]);
+  let [lastU, x] = [Number.NaN, Number.NaN];
+  for (let i = 0; i < n; i++) {
+    if (u[i] !== lastU) {
+      lastU = u[i];
+      x = marginal.quantileOfNormal(lastU);
+    }
+    column[i] = x;
+  }
   hold(drive, column, n, strayed);
 }
 

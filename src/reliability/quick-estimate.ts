@@ -55,7 +55,7 @@ function countPlain(states: LimitStates, seed: string, samples: number): number 
       n,
       factors,
       marks,
-      true,
+      false,
     );
     for (let i = 0; i < n; i++) if (factors.some((column) => column[i] < 1)) failures++;
   }

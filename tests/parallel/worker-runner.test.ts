@@ -44,7 +44,7 @@ async function sampled(workers: number, samples: number, options: MonteCarloOpti
 const longest: SamplingPlan = {
   seed: "any",
   purpose: "plain sampling",
-  samples: 20 * 16_384,
+  samples: 12 * 16_384,
   centres: [1, 1, 1],
   edges: [
     [0, 1, 2],

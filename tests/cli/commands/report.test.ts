@@ -3,6 +3,20 @@ import { join } from "node:path";
 import { beforeEach, describe, expect, test } from "vitest";
 import { few, newFolder, runWith, yard } from "../fake-io.ts";
 
+/** One unknown and one limit state: a page of every section, quickly. */
+const small = `
+title: Garden wall (invented)
+wall:
+  stem: { height: 3, crest_width: 0.3, foot_width: 0.4 }
+  base: { toe: 0.5, heel: 1.4, thickness: 0.4 }
+  unit_weight: 24
+  sliding_friction: { ratio: 0.8 }
+soils:
+  fill: { unit_weight: 19, friction_angle: { normal: { mean: 32, sd: 3 } } }
+ground: { behind: { layers: [ { soil: fill } ] }, below: { soil: fill }, front: { level: 0.5 } }
+assessment: { limit_states: [sliding], seed: garden }
+`;
+
 let folder: string;
 beforeEach(() => {
   folder = newFolder();
@@ -20,15 +34,16 @@ describe("toehold report", () => {
   });
 
   test("-o - puts the page, and nothing else, on standard output", async () => {
-    const ran = await runWith(["report", yard, "-o", "-", ...few]);
+    const ran = await runWith(["report", "-", "-o", "-", ...few], { input: small });
     expect(ran).toMatchObject({ code: 0, err: "" });
     expect(ran.out).toMatch(/^<!doctype html>[\s\S]*<\/html>\s*$/);
   });
 
   test("--quiet prints nothing, --json the assessment", async () => {
     const page = join(folder, "page.html");
-    expect(await runWith(["report", yard, "-o", page, "--quiet", ...few])).toEqual({ code: 0, out: "", err: "" });
-    const ran = await runWith(["report", yard, "-o", page, "--json", ...few]);
+    const input = { input: small };
+    expect(await runWith(["report", "-", "-o", page, "--quiet", ...few], input)).toEqual({ code: 0, out: "", err: "" });
+    const ran = await runWith(["report", "-", "-o", page, "--json", ...few], input);
     expect(JSON.parse(ran.out)).toMatchObject({ kind: "assess" });
   });
 
