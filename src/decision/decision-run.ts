@@ -124,7 +124,7 @@ export function missedRegions(
 /** Samples of a main run with the standard error wanted, from the pilot's. */
 function sizeFor(basis: DecisionBasis, centres: readonly FailureCentre[], drawn: number, precision: number): number {
   const { problem, outcomes, today, runnerUp } = basis;
-  const perfect = valueOfPerfectInformation(basis, failureModes(basis, centres)).value;
+  const perfect = valueOfPerfectInformation(basis, failureModes(basis, centres), { careful: false }).value;
   const failureCost = outcomes[today].expectedCost.value - problem.options[today].cost;
   const wanted = Math.max(precision * perfect.value, 1e-3 * failureCost);
   if (!(wanted > 0)) return 0;

@@ -23,8 +23,14 @@ interface Predictions {
  * states themselves. For the others the conditional cost comes from the failure modes, Φ(−(β − α_K·K)/|α_A|), and where two
  * options come close, from where the limit states themselves fail along α_A. This sorts the samples into cells; in each cell
  * the samples decide.
+ *
+ * @param careful where false, predictions from the design points are enough: for sizing a run, say
  */
-export function valueOfPerfectInformation(basis: DecisionBasis, modes: readonly FailureMode[]): CellDecision {
+export function valueOfPerfectInformation(
+  basis: DecisionBasis,
+  modes: readonly FailureMode[],
+  { careful = true }: { readonly careful?: boolean } = {},
+): CellDecision {
   const { failures, beliefs } = basis;
   const { options, roles } = basis.problem;
   const certain = options.map(({ reads }) => reads?.every((j) => roles[j] === "knowledge") === true);
@@ -37,7 +43,7 @@ export function valueOfPerfectInformation(basis: DecisionBasis, modes: readonly 
       predicted.cost[o].set(cost);
       predicted.probability[o].set(failure);
     });
-    refine(basis, open, z, predicted);
+    if (careful) refine(basis, open, z, predicted);
     return cellsOf(basis, predicted, count);
   };
   return valueOfDecisionCells(basis, {
@@ -105,18 +111,19 @@ function refine(
   options.forEach((_, o) => {
     const own = modes.filter(({ option }) => option === o);
     if (own.length === 0) return;
-    const refined = own.map((mode) => refinedChances(basis, mode, z, places));
-    places.forEach((i, k) => {
-      const chances = refined.map(({ chance }) => chance[k]);
-      predicted.cost[o][i] = together(
-        refined.map(({ natural }) => natural),
-        chances.map((chance, m) => chance * (failureCosts[own[m].limitState] ?? 0)),
-      );
-      predicted.probability[o][i] = together(
-        refined.map(({ natural }) => natural),
-        chances,
-      );
-    });
+    const fronts = own.map((mode) => frontOf(basis, mode, z, places));
+    moveFronts(basis, own, fronts, z, places);
+    const directions = fronts.map(({ along }) => along);
+    const prices = own.map(({ limitState }) => failureCosts[limitState] ?? 0);
+    const [chances, costs] = [own.map(() => 0), own.map(() => 0)];
+    for (let k = 0; k < places.length; k++) {
+      for (let m = 0; m < own.length; m++) {
+        chances[m] = normalUpper(fronts[m].distance[k]);
+        costs[m] = chances[m] * prices[m];
+      }
+      predicted.cost[o][places[k]] = together(directions, costs);
+      predicted.probability[o][places[k]] = together(directions, chances);
+    }
   });
 }
 
@@ -134,31 +141,67 @@ function closeOnes(basis: DecisionBasis, { cost, probability }: Predictions): In
   return Int32Array.from(close);
 }
 
-/** Chance of failure of one mode given K, along the part of its direction that is not known. */
-function refinedChances(
+/** One mode given K: the part of its direction that is not known, of unit length, and where along it failure begins. */
+interface Front {
+  readonly along: Float64Array;
+  /** Length of the part that is not known; 0 where knowledge decides all. */
+  readonly size: number;
+  /** One for each place; −∞ or ∞ where knowledge decides all. */
+  readonly distance: Float64Array;
+}
+
+/** The front of a mode as its design point has it: straight. */
+function frontOf(
   { problem }: DecisionBasis,
-  { option, index, direction, limitState, overYears }: FailureMode,
+  { index, direction }: FailureMode,
   z: readonly Float64Array[],
   places: Int32Array,
-): { readonly chance: Float64Array; readonly natural: Float64Array } {
-  const { roles, years } = problem;
-  const isKnown = (j: number): boolean => roles[j] === "knowledge";
+): Front {
+  const isKnown = (j: number): boolean => problem.roles[j] === "knowledge";
   const natural = direction.map((x, j) => (isKnown(j) ? 0 : x));
-  const size = Math.hypot(...natural);
-  const along = natural.map((x) => (size > 0 ? x / size : 0));
-  const points = z.map((column, j) =>
-    isKnown(j) ? Float64Array.from(places, (i) => column[i]) : new Float64Array(places.length),
-  );
+  const length = Math.hypot(...natural);
+  const size = length < 1e-6 ? 0 : length;
   const distance = new Float64Array(places.length).fill(index);
-  points.forEach((column, j) => {
-    for (let k = 0; k < column.length; k++) distance[k] -= direction[j] * column[k];
+  for (let j = 0; j < z.length; j++) {
+    if (!isKnown(j) || direction[j] === 0) continue;
+    const [column, share] = [z[j], direction[j]];
+    for (let k = 0; k < places.length; k++) distance[k] -= share * column[places[k]];
+  }
+  for (let k = 0; k < places.length; k++)
+    distance[k] = size > 0 ? distance[k] / size : distance[k] < 0 ? Number.NEGATIVE_INFINITY : Number.POSITIVE_INFINITY;
+  return { along: natural.map((x) => (size > 0 ? x / size : 0)), size, distance };
+}
+
+/** A front this much farther out than the nearest of its option adds a hundredth to the chance, or less. */
+const ofNoAccount = 2.5;
+
+/** Takes the fronts to where the limit states themselves fail; one far behind another at a place is left as it is there. */
+function moveFronts(
+  { problem }: DecisionBasis,
+  modes: readonly FailureMode[],
+  fronts: readonly Front[],
+  z: readonly Float64Array[],
+  places: Int32Array,
+): void {
+  const { roles, years, options } = problem;
+  const least = new Float64Array(places.length).fill(Number.POSITIVE_INFINITY);
+  for (const { distance } of fronts) for (let k = 0; k < least.length; k++) least[k] = Math.min(least[k], distance[k]);
+  modes.forEach(({ option, limitState, overYears }, m) => {
+    const { along, size, distance } = fronts[m];
+    if (size === 0) return;
+    const near = places.map((_, k) => k).filter((k) => distance[k] < Math.max(least[k], 0) + ofNoAccount);
+    const points = z.map((column, j) => {
+      const point = new Float64Array(near.length);
+      if (roles[j] === "knowledge") for (let i = 0; i < near.length; i++) point[i] = column[places[near[i]]];
+      return point;
+    });
+    const s = new Float64Array(near.length);
+    for (let i = 0; i < near.length; i++) s[i] = distance[near[i]];
+    const { states } = options[option];
+    const surface = overYears === undefined ? states : statesOfPeriod(states, overYears, years);
+    refineIndices(surface, states.names.indexOf(limitState), points, along, s);
+    for (let i = 0; i < near.length; i++) distance[near[i]] = s[i];
   });
-  if (size < 1e-6) return { chance: distance.map((d) => (d < 0 ? 1 : 0)), natural: along };
-  const { states } = problem.options[option];
-  const surface = overYears === undefined ? states : statesOfPeriod(states, overYears, years);
-  const s = distance.map((d) => d / size);
-  refineIndices(surface, states.names.indexOf(limitState), points, along, s);
-  return { chance: s.map(normalUpper), natural: along };
 }
 
 /**
