@@ -2,7 +2,7 @@
  * The forms a distribution takes in a study file: one table of kinds and their keys. The zod schema, the JSON Schema and
  * the reading of a distribution all come from it.
  */
-import { z } from "zod";
+import * as z from "./zod.ts";
 
 /**
  * What a key of a distribution holds: a `value` of the quantity (with unit, within its range), a `parent` value (with

@@ -6,12 +6,13 @@
  * editor writes it into a file.
  * Ranges of values with a unit are in words only, because the unit hangs on `units`.
  */
-import { z } from "zod";
+
 import { certainSchema, distributionKinds, type KeyType, uncertainSchema } from "./distribution-keys.ts";
 import { type Field, fieldOfPattern } from "./fields.ts";
 import { rangeText } from "./read-number.ts";
 import { studySchema } from "./schema.ts";
 import { plainUnit, usualUnits } from "./units.ts";
+import * as z from "./zod.ts";
 
 type Json = Record<string, unknown>;
 

@@ -1,8 +1,9 @@
 /** Schema of the model, the correlations and the assessment. */
-import { z } from "zod";
+
 import { defaults, limitStateNames } from "./defaults.ts";
 import { about, group, quantity, text, words } from "./schema-words.ts";
 import { targetNames } from "./targets.ts";
+import * as z from "./zod.ts";
 
 export const model: z.ZodObject = group("How the engine computes", {
   earth_pressure: words("Earth pressure behind the wall", ["rankine", "coulomb", "at_rest"], defaults.earthPressure),

@@ -1,9 +1,10 @@
 /** Schema of evidence and decision. */
-import { z } from "zod";
+
 import { defaults, limitStateNames } from "./defaults.ts";
 import { leaf } from "./distribution-keys.ts";
 import { pathText } from "./schema-assessment.ts";
 import { about, flag, group } from "./schema-words.ts";
+import * as z from "./zod.ts";
 
 const plainNumber = (description: string, example: number): z.ZodType =>
   leaf({ number: "of_path", description, examples: [example] });

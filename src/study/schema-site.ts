@@ -1,8 +1,9 @@
 /** Schema of the site: wall, soils, ground, water and loads. */
-import { z } from "zod";
+
 import { defaults } from "./defaults.ts";
 import { isReservedKey } from "./paths.ts";
 import { about, flag, group, quantity, text, words } from "./schema-words.ts";
+import * as z from "./zod.ts";
 
 export const wall: z.ZodObject = group("The wall: a stem, with or without a base slab", {
   stem: group("Stem, a trapezoid", {

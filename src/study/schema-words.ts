@@ -1,7 +1,8 @@
 /** The words the schema is written in: small makers of keys that carry their own explanation. */
-import { z } from "zod";
+
 import { leaf } from "./distribution-keys.ts";
 import { fieldOfPattern } from "./fields.ts";
+import * as z from "./zod.ts";
 
 /** A numeric field, by its row of the table. */
 export function quantity(pattern: string): z.ZodType<unknown> {

@@ -4,12 +4,13 @@
  * Numeric fields are leaves that only carry their row of `fields.ts`: `read-quantity.ts` reads them, because their units
  * and ranges hang on the file. The JSON Schema is made from the same tree (`json-schema.ts`).
  */
-import { z } from "zod";
+
 import { defaults } from "./defaults.ts";
 import { assessment, correlation, model } from "./schema-assessment.ts";
 import { decision, evidence } from "./schema-decision.ts";
 import { ground, loads, soil, soilName, wall, water } from "./schema-site.ts";
 import { about, group, text, words } from "./schema-words.ts";
+import * as z from "./zod.ts";
 
 export const studySchema: z.ZodObject = group("One retaining wall with everything that is known and unknown about it", {
   title: text("Title", "Bay 3 (invented)", defaults.title),

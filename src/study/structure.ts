@@ -1,8 +1,9 @@
 /** Schema issues in this project's words, with the nearest known key; and what a zod schema knows about its keys. */
-import { z } from "zod";
+
 import type { Findings } from "./findings.ts";
 import { isRecord, valueAtKeys } from "./paths.ts";
 import { didYouMean } from "./suggest.ts";
+import * as z from "./zod.ts";
 
 /** The schema without `optional`, `nullable` and the like. */
 export function inner(schema: z.ZodType | undefined): z.ZodType | undefined {
