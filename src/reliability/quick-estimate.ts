@@ -14,15 +14,26 @@ const common = 80;
 /**
  * Probability that any limit state fails, at the least cost: counted where failures are common, sampled around the design points
  * elsewhere. For curves and searches over many walls; with one seed all walls see the same draws, so the curve is smooth.
+ *
+ * Tables serve all of it, the search too: sampling needs to know about where a design point lies, not its last digits.
  */
 export function estimateProbability(states: LimitStates, space: JointSpace, order: SamplingOrder): SamplingEstimate {
   const before = evaluationsOf(states);
   const failures = countPlain(states, order.seed, look);
   if (failures >= common) return plainOf(failures, look, evaluationsOf(states) - before);
-  const search = findDesignPoints(states, space, order.seed);
+  const search = findDesignPoints(fromTables(states), space, order.seed);
   const points = search.states.flatMap((state) => state.points);
   if (points.length > 0) return importanceSampling(states, space, points, order, evaluationsOf(states) - before);
   return plainOf(failures, look, evaluationsOf(states) - before);
+}
+
+/** The same limit states, never evaluated exactly. */
+function fromTables(states: LimitStates): LimitStates {
+  return {
+    ...states,
+    evaluations: states.evaluations,
+    evaluate: (z, n, factors, marks) => states.evaluate(z, n, factors, marks, false),
+  };
 }
 
 function plainOf(failures: number, samples: number, evaluations: number): SamplingEstimate {
