@@ -19,19 +19,19 @@ export interface HandMethods {
   readonly eigenvectorPoints?: HandMethod;
 }
 
-interface WithInterval {
+export interface WithInterval {
   readonly value: number;
   readonly interval: readonly [number, number];
 }
 
-interface Derivative {
+export interface Derivative {
   /** Change of the failure probability per unit; null where it is not known. */
   readonly value: number | null;
   readonly standardError: number | null;
   readonly from: "score" | "design_point";
 }
 
-interface DerivativesOf {
+export interface DerivativesOf {
   readonly path: string;
   readonly perMean: Derivative;
   readonly perSd: Derivative;

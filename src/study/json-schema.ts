@@ -14,7 +14,8 @@ import { studySchema } from "./schema.ts";
 import { plainUnit, usualUnits } from "./units.ts";
 import * as z from "./zod.ts";
 
-type Json = Record<string, unknown>;
+/** A JSON object. */
+export type Json = Record<string, unknown>;
 
 /** Annotations of zod leaves that are for the reader of this program, not for the reader of the schema. */
 const inward = ["field", "number", "distribution", "wanted"];
