@@ -20,6 +20,8 @@ export interface AllOrder {
   readonly seed: string;
   readonly search: DesignPointSearch;
   readonly correlation: (i: number, j: number) => number;
+  /** Pictures given failure are then of what is believed after it, and stay as they are. */
+  readonly withEvidence?: boolean;
 }
 
 /** Adds all measures to the limit states and the system of an assessment. */
@@ -30,7 +32,7 @@ export function withAllMeasures(
   order: AllOrder,
 ): { readonly limitStates: Readonly<Record<string, LimitStateAssessment>>; readonly system: SystemAssessment } {
   const { states, space } = model;
-  const { seed, search, correlation } = order;
+  const { seed, search, correlation, withEvidence = false } = order;
   if (space.unknowns.length === 0) return { limitStates, system };
   const assessed = states.names.map((name) => limitStates[name]);
   const full = fullDrivers({
@@ -53,7 +55,7 @@ export function withAllMeasures(
         ...state,
         handMethods: hands[k],
         allDrivers,
-        failurePicture: sharper(state.failurePicture, failurePicture),
+        failurePicture: withEvidence ? state.failurePicture : sharper(state.failurePicture, failurePicture),
       },
     ];
   });
@@ -61,7 +63,7 @@ export function withAllMeasures(
     limitStates: Object.fromEntries(entries),
     system: {
       ...system,
-      failurePicture: sharper(system.failurePicture, full.system.failurePicture),
+      failurePicture: withEvidence ? system.failurePicture : sharper(system.failurePicture, full.system.failurePicture),
       ...fromPoints(model, search),
       fragility: fragilityOf(
         model,

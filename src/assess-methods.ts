@@ -81,7 +81,7 @@ export function bestEstimateOf(
 }
 
 /** Plain sampling as it was run, of the period where there is one. */
-function plainInHand({ monteCarlo, period }: SystemAssessment): SamplingEstimate {
+export function plainInHand({ monteCarlo, period }: SystemAssessment): SamplingEstimate {
   const { probability, standardError, interval } = period ?? monteCarlo;
   return {
     method: "plain",
@@ -103,7 +103,7 @@ export function plainEstimate(study: Study, system: SystemAssessment): BestEstim
   );
 }
 
-function asResult(study: Study, found: BestOfMethods, years: number | undefined): BestEstimate {
+export function asResult(study: Study, found: BestOfMethods, years: number | undefined): BestEstimate {
   const { method, probability, standardError, interval, intervalKind, evaluations, doubts, reason, crossCheck } = found;
   const { target } = study.assessment;
   return {

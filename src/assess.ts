@@ -1,15 +1,18 @@
 /** How likely is each failure, how sure are we, and which unknown drives it? */
 import { withAllMeasures } from "./assess-all.ts";
+import { bestEstimateWithEvidence } from "./assess-evidence.ts";
 import { bestEstimateOf, plainEstimate, pointMethods } from "./assess-methods.ts";
 import { cautions } from "./cautions.ts";
 import { cautiousValues, driverTable } from "./drivers/driver-table.ts";
 import { failurePicture } from "./drivers/failure-picture.ts";
 import { tornado } from "./drivers/tornado.ts";
 import { StudyError } from "./errors.ts";
+import { evidence, evidenceNotes } from "./evidence.ts";
 import { mechanicsNotes } from "./mechanics/notes.ts";
 import { createWorkspace } from "./mechanics/workspace.ts";
 import { buildModel, type Model, unknownsOf } from "./model.ts";
 import { assessmentNotes } from "./notes.ts";
+import { type SampledModel, sampledModel } from "./posterior.ts";
 import { createBlockCounter, type SamplingPlan } from "./reliability/block-tally.ts";
 import { type DesignPointSearch, findDesignPoints } from "./reliability/design-points.ts";
 import { firstOrderResult } from "./reliability/first-order.ts";
@@ -35,6 +38,7 @@ import type {
   TornadoBar,
   VariableSummary,
 } from "./results.ts";
+import type { BeliefMoments, EvidenceResult } from "./results-decision.ts";
 import type { LimitStateName, Study } from "./study/study.ts";
 import { variableSummaries } from "./variables.ts";
 import { version } from "./version.ts";
@@ -75,38 +79,57 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     edges: secondMoment.map((moment) => histogramEdges(moment.mean, moment.sd)),
   };
   const start = options.clock?.() ?? 0;
-  const runner = options.startRunner?.(study, plan) ?? localRunner(createBlockCounter(states, space, plan));
+  const sampled = sampledModel(study, model);
+  const runner =
+    options.startRunner?.(study, plan) ??
+    localRunner(createBlockCounter(sampled.states, sampled.space, plan, sampled.agrees));
   const run = await monteCarlo(plan, runner, {
     precision: options.precision ?? study.assessment.precision,
     ...(options.onProgress === undefined ? {} : { onProgress: options.onProgress }),
     ...(options.signal === undefined ? {} : { signal: options.signal }),
   }).finally(() => runner.close?.());
-  const period = await periodOf(model, seed, options, run.complete);
+  const period = await periodOf(study, sampled, seed, options, run.complete);
   const goOn = run.complete && (period?.complete ?? true) && options.signal?.aborted !== true;
   const search = goOn ? findDesignPoints(states, space, seed) : undefined;
+  const seen = evidence(study, { seed });
+  const sources: SampleSources = { model, run, ...(seen === undefined ? {} : { moments: momentsOf(seen) }) };
   const assessed = Object.fromEntries(
     states.names.map((name, k) => [
       name,
       {
-        ...limitStateAssessment(model, run, plan, k, secondMoment[k], bars[k]),
+        ...limitStateAssessment(sources, plan, k, secondMoment[k], bars[k]),
         ...(search === undefined ? {} : pointMethods(model, search, k)),
       },
     ]),
   ) as Partial<Record<LimitStateName, LimitStateAssessment>>;
-  const whole = systemAssessment(model, run, assessed, period);
+  const whole = systemAssessment(sources, assessed, period);
   const { limitStates, system } =
     search === undefined || options.all !== true
       ? { limitStates: assessed, system: whole }
-      : withAllMeasures(model, assessed, whole, { seed, search, correlation: correlationOf(study, model) });
+      : withAllMeasures(model, assessed, whole, {
+          seed,
+          search,
+          correlation: correlationOf(study, model),
+          withEvidence: seen !== undefined,
+        });
+  const order = {
+    seed,
+    samples: options.samples ?? study.assessment.samples,
+    precision: options.precision ?? study.assessment.precision,
+    ...(options.method === undefined ? {} : { method: options.method }),
+  };
   const bestEstimate =
     search === undefined
       ? plainEstimate(study, system)
-      : bestEstimateOf(model, search, system, {
-          seed,
-          samples: options.samples ?? study.assessment.samples,
-          precision: options.precision ?? study.assessment.precision,
-          ...(options.method === undefined ? {} : { method: options.method }),
-        });
+      : sampled.problem === undefined
+        ? bestEstimateOf(model, search, system, order)
+        : bestEstimateWithEvidence(
+            study,
+            sampled.problem,
+            { run, ...(period === undefined ? {} : { period }) },
+            system,
+            order,
+          );
   const seconds = (options.clock?.() ?? 0) - start;
   const variables = variableSummaries(study, unknownsOf(study, kernel), space);
   const columns = columnsAtMeans(model);
@@ -119,20 +142,26 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     limitStates,
     system,
     bestEstimate,
+    ...(seen === undefined ? {} : { evidence: seen }),
     ...(target === undefined ? {} : { target }),
     run: {
       version,
       seed,
       workers: options.workers ?? 1,
       complete: run.complete && (period?.complete ?? true),
-      sampling: { evaluations: run.samples + (period?.evaluations ?? 0), seconds },
+      sampling: { evaluations: run.drawn + (period?.evaluations ?? 0), seconds },
     },
     warnings: [],
     cautions,
   };
   return {
     ...result,
-    warnings: [...study.notices, ...mechanicsNotes(study, kernel, columns), ...assessmentNotes(study, result)],
+    warnings: [
+      ...study.notices,
+      ...mechanicsNotes(study, kernel, columns),
+      ...assessmentNotes(study, result),
+      ...(seen === undefined ? [] : evidenceNotes(study, seen)),
+    ],
   };
 }
 
@@ -148,21 +177,39 @@ function correlationOf(study: Study, model: Model): (i: number, j: number) => nu
   return (i, j) => given.get(`${unknowns[i].path} ${unknowns[j].path}`) ?? 0;
 }
 
+/** What the samples say, and of whom. */
+interface SampleSources {
+  readonly model: Model;
+  readonly run: MonteCarloRun;
+  /** After evidence, by path. */
+  readonly moments?: ReadonlyMap<string, BeliefMoments>;
+}
+
+const momentsOf = ({ variables }: EvidenceResult): ReadonlyMap<string, BeliefMoments> =>
+  new Map(variables.map(({ path, posterior }) => [path, posterior]));
+
+const believedIn = ({ run, moments }: SampleSources) => (moments === undefined ? undefined : run.believed);
+
 function limitStateAssessment(
-  model: Model,
-  run: MonteCarloRun,
+  sources: SampleSources,
   plan: SamplingPlan,
   k: number,
   secondMoment: SecondMomentResult,
   bars: readonly TornadoBar[],
 ): LimitStateAssessment {
+  const { model, run, moments } = sources;
   const state = run.states[k];
-  const picture = failurePicture(model.space, state);
+  const picture = failurePicture(model.space, state, believedIn(sources));
   return {
     factorAtMean: secondMoment.mean,
     monteCarlo: monteCarloResult(run, state, plan.centres[k]),
     firstOrderSecondMoment: secondMoment,
-    drivers: driverTable(model.space, { shares: secondMoment.contributions, tornado: bars, picture }),
+    drivers: driverTable(model.space, {
+      shares: secondMoment.contributions,
+      tornado: bars,
+      picture,
+      ...(moments === undefined ? {} : { moments }),
+    }),
     tornado: bars,
     failurePicture: picture,
     histogram: histogramOf(state, plan.edges[k]),
@@ -171,17 +218,20 @@ function limitStateAssessment(
 }
 
 function systemAssessment(
-  model: Model,
-  run: MonteCarloRun,
+  sources: SampleSources,
   limitStates: Partial<Record<LimitStateName, LimitStateAssessment>>,
   period: PeriodResult | undefined,
 ): SystemAssessment {
-  const picture = failurePicture(model.space, run.system);
+  const { model, run, moments } = sources;
+  const picture = failurePicture(model.space, run.system, believedIn(sources));
   return {
     monteCarlo: monteCarloResult(run, run.system),
     ...(period === undefined ? {} : { period: periodAssessment(period) }),
-    bounds: systemBounds(Object.values(limitStates).map(probabilityInHand)),
-    drivers: driverTable(model.space, { picture }),
+    bounds:
+      moments === undefined
+        ? systemBounds(Object.values(limitStates).map(probabilityInHand))
+        : boundsFromIntervals(Object.values(limitStates)),
+    drivers: driverTable(model.space, { picture, ...(moments === undefined ? {} : { moments }) }),
     failurePicture: picture,
     convergence: run.system.convergence,
   };
@@ -194,18 +244,26 @@ function probabilityInHand(state: LimitStateAssessment): number {
   return state.secondOrderReliability?.probability ?? state.firstOrderReliability?.probability ?? probability;
 }
 
+/** With evidence, design points describe what was believed before it: bounds then come from the samples' intervals alone. */
+function boundsFromIntervals(states: readonly LimitStateAssessment[]): readonly [number, number] {
+  const [lower] = systemBounds(states.map(({ monteCarlo }) => monteCarlo.interval[0]));
+  const [, upper] = systemBounds(states.map(({ monteCarlo }) => monteCarlo.interval[1]));
+  return [lower, upper];
+}
+
 /** Where something in the study is yearly, whole periods are drawn too. */
 async function periodOf(
-  model: Model,
+  study: Study,
+  { states, space, agrees }: SampledModel,
   seed: string,
   options: AssessOptions,
   goOn: boolean,
 ): Promise<PeriodResult | undefined> {
-  const { period, samples, precision } = model.study.assessment;
-  if (period === undefined || !goOn || !model.space.coordinates.some((coordinate) => coordinate.yearly))
-    return undefined;
-  return periodProbability(model.states, model.space, {
+  const { period, samples, precision } = study.assessment;
+  if (period === undefined || !goOn || !space.coordinates.some((coordinate) => coordinate.yearly)) return undefined;
+  return periodProbability(states, space, {
     seed,
+    ...(agrees === undefined ? {} : { agrees }),
     years: period,
     evaluations: options.samples ?? samples,
     precision: options.precision ?? precision,

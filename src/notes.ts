@@ -10,6 +10,7 @@ export function assessmentNotes(study: Study, result: AssessResult): readonly No
     ...unstableSamples(result),
     ...strays(result),
     ...noFailures(result),
+    ...fewAgree(result),
     ...unfinished(result),
     ...groundAsItIs(study),
     ...overturningLast(result),
@@ -72,7 +73,7 @@ function strays(result: AssessResult): readonly Notice[] {
 
 function noFailures(result: AssessResult): readonly Notice[] {
   const { failures, samples, interval } = result.system.monteCarlo;
-  if (failures > 0) return [];
+  if (failures > 0 || samples === 0) return [];
   const elsewhere =
     result.bestEstimate.method === "plain" || !(result.bestEstimate.probability > 0)
       ? ""
@@ -81,6 +82,18 @@ function noFailures(result: AssessResult): readonly Notice[] {
     {
       path: "assessment.samples",
       message: `no failure in ${samples} plain samples: this says only that the probability is below ${interval[1].toPrecision(2)} with 97.5 % confidence, not that the wall cannot fail${elsewhere}`,
+    },
+  ];
+}
+
+/** Plain sampling sees little where the evidence was not to be expected. */
+function fewAgree({ evidence, system, bestEstimate }: AssessResult): readonly Notice[] {
+  const { samples } = system.monteCarlo;
+  if (evidence === undefined || samples >= 1000) return [];
+  return [
+    {
+      path: "evidence",
+      message: `only ${samples} plain samples agree with what has been seen: the probabilities of single limit states are hardly known${bestEstimate.method === "plain" ? "" : ", the best estimate is"}`,
     },
   ];
 }

@@ -2,6 +2,8 @@
  * Shapes of the results, as every room and the public door see them. House units, angles in degrees. In the result file
  * (`--json`) the same keys appear in snake_case; keys that are paths (they hold a dot) and limit state names stay as they are.
  */
+
+import type { EvidenceResult } from "./results-decision.ts";
 import type { AllDrivers, FragilityCurve, HandMethods, SystemFromDesignPoints } from "./results-methods.ts";
 import type { LimitStateName, Notice, Study } from "./study/study.ts";
 
@@ -336,6 +338,8 @@ export interface AssessResult extends ResultBase {
   readonly limitStates: Readonly<Partial<Record<LimitStateName, LimitStateAssessment>>>;
   readonly system: SystemAssessment;
   readonly bestEstimate: BestEstimate;
+  /** Where the study has evidence; samples then follow what is believed after it, everything else what was believed before. */
+  readonly evidence?: EvidenceResult;
   readonly target?: {
     readonly probability: number;
     readonly reliabilityIndex: number;

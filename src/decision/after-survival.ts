@@ -20,8 +20,10 @@ export function createSurvivalMargin(
 /**
  * Limit states that fail where the wall fails now *and* has stood what it has stood: what a search for design points with
  * evidence looks for. The factor is the greater of F and 1/(least factor then), so both conditions meet at 1.
+ *
+ * @param level least factor that counts as survival: 1, or less for a search on its way there
  */
-export function failureAfterSurvival(states: LimitStates, survivals: readonly LimitStates[]): LimitStates {
+export function failureAfterSurvival(states: LimitStates, survivals: readonly LimitStates[], level = 1): LimitStates {
   if (survivals.length === 0) return states;
   const margin = createSurvivalMargin(survivals);
   const capacity = Math.min(states.capacity, ...survivals.map((one) => one.capacity));
@@ -36,7 +38,7 @@ export function failureAfterSurvival(states: LimitStates, survivals: readonly Li
       states.evaluate(z, n, factors, marks, exact);
       margin(z, n, least, exact);
       for (const column of factors)
-        for (let i = 0; i < n; i++) column[i] = Math.max(column[i], Math.min(1 / least[i], cap));
+        for (let i = 0; i < n; i++) column[i] = Math.max(column[i], Math.min(level / least[i], cap));
     },
     evaluateAt() {
       throw new RangeError("what was survived depends on coordinates, not on values of the variables alone");

@@ -1,5 +1,11 @@
 import type { LimitStates } from "../reliability/limit-states.ts";
-import { applyForm, type DecisionProblem, type LinearForm, type SeenResults } from "./decision-problem.ts";
+import {
+  applyForm,
+  type DecisionProblem,
+  type LikelihoodPart,
+  type LinearForm,
+  type SeenResults,
+} from "./decision-problem.ts";
 import { type ResultSite, resultSite } from "./result-site.ts";
 
 /** z = centre + matrix·z′, row-major by z; z′ are independent standard normals of what is believed after the results. */
@@ -32,7 +38,7 @@ export function conditionOnResults(problem: DecisionProblem, results: readonly S
     sites.push(site);
     map = withSite(map, before, site);
   }
-  const corrections = sites.flatMap(({ variable, logCorrection }) =>
+  const corrections: readonly LikelihoodPart[] = sites.flatMap(({ variable, logCorrection }) =>
     logCorrection === undefined ? [] : [{ form: mapped(problem.variables[variable].known, map), logCorrection }],
   );
   const { likelihood } = problem;
@@ -58,6 +64,7 @@ export function conditionOnResults(problem: DecisionProblem, results: readonly S
               for (let i = 0; i < n; i++) out[i] *= Math.exp(logCorrection(k[i]));
             }
           },
+          ...(likelihood === undefined ? { likelihoodParts: corrections } : {}),
         }),
   };
 }

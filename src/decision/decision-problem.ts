@@ -32,6 +32,8 @@ export interface DecisionProblem {
    * Multiplies the first n entries of `out`.
    */
   readonly likelihood?: (z: readonly Float64Array[], n: number, out: Float64Array) => void;
+  /** Where the likelihood is a product of functions of one linear form each: their logarithms. */
+  readonly likelihoodParts?: readonly LikelihoodPart[];
 }
 
 /**
@@ -53,6 +55,12 @@ export interface DecisionOption {
 export interface LinearForm {
   readonly offset: number;
   readonly row: Float64Array;
+}
+
+/** Logarithm of a factor of the likelihood, as a function of k = offset + row·z. */
+export interface LikelihoodPart {
+  readonly form: LinearForm;
+  readonly logCorrection: (k: number) => number;
 }
 
 /** X = marginal(U), U = √κ·K + √(1 − κ)·A, with U and K as linear forms of z. */

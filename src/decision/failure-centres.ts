@@ -1,5 +1,5 @@
 import type { JointSpace, Marginal } from "../probability/marginal.ts";
-import { findDesignPoints } from "../reliability/design-points.ts";
+import { type DesignPoint, type DesignPointSearch, findDesignPoints } from "../reliability/design-points.ts";
 import type { LimitStates } from "../reliability/limit-states.ts";
 import { failureAfterSurvival, survivalAsFailure } from "./after-survival.ts";
 import type { DecisionProblem } from "./decision-problem.ts";
@@ -23,7 +23,7 @@ export function findFailureCentres(problem: DecisionProblem, seed: string): Cent
   const { years, roles } = problem;
   let evaluations = 0;
   const centresOf = (states: LimitStates, option: number): FailureCentre[] => {
-    const search = findDesignPoints(failureAfterSurvival(states, problem.survivals), space, seed);
+    const search = searchAfterSurvival(states, problem.survivals, space, seed);
     evaluations += search.evaluations;
     return search.states.flatMap(({ points, originFails }, k) =>
       points.map(
@@ -52,6 +52,32 @@ export function findFailureCentres(problem: DecisionProblem, seed: string): Cent
   return { centres, survivalPoints: survivalPointsOf(problem, space, seed), evaluations };
 }
 
+/** Least factors that count as survival, on the way to 1. */
+const levels = [0.5, 0.75, 0.9, 0.97];
+
+/**
+ * Design points of failure now and survival then. Where the two leave no more than a narrow strip, no start falls into it: the
+ * search then lets survival be easier at first, and goes on from what it finds as survival becomes what it was.
+ */
+export function searchAfterSurvival(
+  states: LimitStates,
+  survivals: readonly LimitStates[],
+  space: JointSpace,
+  seed: string,
+): DesignPointSearch {
+  const direct = findDesignPoints(failureAfterSurvival(states, survivals), space, seed);
+  if (survivals.length === 0 || direct.states.every(({ points }) => points.length > 0)) return direct;
+  let { evaluations } = direct;
+  let known: readonly DesignPoint[] = [];
+  for (const level of [...levels, 1]) {
+    const search = findDesignPoints(failureAfterSurvival(states, survivals, level), space, seed, known);
+    evaluations += search.evaluations;
+    known = search.states.flatMap(({ points }) => points);
+    if (level === 1) return { ...search, evaluations };
+  }
+  return direct;
+}
+
 function survivalPointsOf({ survivals }: DecisionProblem, space: JointSpace, seed: string): Float64Array[] {
   if (survivals.length === 0) return [];
   const [search] = findDesignPoints(survivalAsFailure(survivals), space, seed).states;
@@ -59,7 +85,7 @@ function survivalPointsOf({ survivals }: DecisionProblem, space: JointSpace, see
 }
 
 /** Where the variables jump, for the search: u = offset + row·z brought to unit length, the jumps moved with it. */
-function searchSpace({ keys, roles, variables, standIns }: DecisionProblem): JointSpace {
+export function searchSpace({ keys, roles, variables, standIns }: DecisionProblem): JointSpace {
   const jumping = [...variables, ...standIns].filter(({ marginal }) => marginal.jumps.length > 0);
   return {
     coordinates: keys.map((key, j) => ({

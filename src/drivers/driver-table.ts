@@ -6,6 +6,8 @@ export interface DriverSources {
   readonly shares?: Readonly<Record<string, number>>;
   readonly tornado?: readonly TornadoBar[];
   readonly picture: readonly FailurePicture[];
+  /** Mean and standard deviation after evidence, by path; those of the distributions where absent. */
+  readonly moments?: ReadonlyMap<string, { readonly mean: number; readonly sd: number }>;
 }
 
 /**
@@ -19,8 +21,8 @@ export function driverTable(space: JointSpace, sources: DriverSources): readonly
   const bars = new Map((sources.tornado ?? []).map((bar) => [bar.path, bar]));
   const rows = space.unknowns.map(({ path, marginal, knowledge }): Driver => {
     const picture = pictures.get(path);
-    const shift =
-      picture === undefined || marginal.sd === 0 ? null : (picture.meanGivenFailure - marginal.mean) / marginal.sd;
+    const { mean, sd } = sources.moments?.get(path) ?? marginal;
+    const shift = picture === undefined || sd === 0 ? null : (picture.meanGivenFailure - mean) / sd;
     const share = sources.shares?.[path] ?? null;
     return {
       path,

@@ -13,8 +13,16 @@ const priorShares: readonly number[] = pictureEdges.slice(1).map((edge, bin) => 
   return upper - (bin === 0 ? 0 : normalCdf(pictureEdges[bin]));
 });
 
-/** For every variable its distribution among the failures beside its prior, on common edges. Empty without failures. */
-export function failurePicture(space: JointSpace, state: StateTotals): readonly FailurePicture[] {
+/**
+ * For every variable its distribution among the failures beside that over all samples, on common edges. Empty without failures.
+ *
+ * @param believed samples that agree with what has been seen; absent without evidence, where the shares are known exactly
+ */
+export function failurePicture(
+  space: JointSpace,
+  state: StateTotals,
+  believed?: StateTotals["picture"],
+): readonly FailurePicture[] {
   const { picture } = state;
   if (picture.failures === 0) return [];
   return space.unknowns.map(({ path, marginal }, v) => {
@@ -23,7 +31,7 @@ export function failurePicture(space: JointSpace, state: StateTotals): readonly 
     return {
       path,
       edges: pictureEdges.map((u) => marginal.quantileOfNormal(u)),
-      prior: priorShares,
+      prior: believed === undefined ? priorShares : believed.bins[v].map((count) => count / believed.failures),
       givenFailure: picture.bins[v].map((count) => count / picture.failures),
       meanGivenFailure: marginal.mean + shift,
       sdGivenFailure: Math.sqrt(Math.max(square, 0)),

@@ -1,6 +1,6 @@
 /** Runs in a worker thread: rebuilds the model from the study, then counts the blocks that it is asked for. */
 import { parentPort, workerData } from "node:worker_threads";
-import { buildModel } from "../model.ts";
+import { sampledModel } from "../posterior.ts";
 import { type BlockTally, createBlockCounter, type SamplingPlan } from "../reliability/block-tally.ts";
 import type { Study } from "../study/study.ts";
 
@@ -18,8 +18,8 @@ export type WorkerAnswer =
 const port = parentPort;
 if (port === null) throw new Error("this file runs as a worker thread alone");
 const { study, plan } = workerData as WorkerTask;
-const { states, space } = buildModel(study);
-const counter = createBlockCounter(states, space, plan);
+const { states, space, agrees } = sampledModel(study);
+const counter = createBlockCounter(states, space, plan, agrees);
 port.on("message", (block: number) => {
   port.postMessage(answerTo(block));
 });

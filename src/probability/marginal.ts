@@ -49,8 +49,10 @@ export interface Unknown {
 export interface JointSpace {
   readonly unknowns: readonly Unknown[];
   readonly coordinates: readonly Coordinate[];
-  /** unknowns × coordinates, row-major by unknown; each row has unit length. */
+  /** unknowns × coordinates, row-major by unknown; each row has unit length (shorter where results have been seen). */
   readonly rows: readonly Float64Array[];
+  /** u = offset + row·z of each unknown, where results have moved what is believed; 0 where absent. */
+  readonly offsets?: readonly number[];
 }
 
 export interface Coordinate {

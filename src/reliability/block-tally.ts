@@ -41,13 +41,23 @@ export interface PictureTally {
 
 export interface BlockTally {
   readonly block: number;
+  /** Samples that count: all that were drawn, or those among them that agree with what has been seen. */
   readonly samples: number;
+  readonly drawn: number;
   /** Samples not marked slope_unstable. */
   stable: number;
   readonly marks: { slopeUnstable: number; lostContact: number; capped: number; outOfRange: number };
   readonly states: readonly StateTally[];
   readonly system: StateTally;
+  /** Values of the unknowns among the first samples that agree with what has been seen, failing or not; absent without evidence. */
+  readonly believed?: PictureTally;
 }
+
+/**
+ * Brings samples to where results have moved what is believed, in place, and says which agree with what has been seen: sets
+ * keep[i] to 1 or 0 for the first n. Those that do are independent samples of what is believed afterwards.
+ */
+export type Agreement = (z: Columns, n: number, keep: Uint8Array) => void;
 
 export const picturesPerBlock = 256;
 /** Bins of the failure picture in u: a quarter of a standard deviation wide, the outermost open. */
@@ -62,8 +72,17 @@ export interface BlockCounter {
 const [slopeUnstable, lostContact, capped, outOfRange] = [1, 2, 4, 8];
 const factorCap = 1e3;
 
-/** Makes the columns once; each block then allocates nothing but its tally. */
-export function createBlockCounter(states: LimitStates, space: JointSpace, plan: SamplingPlan): BlockCounter {
+/**
+ * Makes the columns once; each block then allocates nothing but its tally.
+ *
+ * @param agrees where there is evidence: samples that do not agree are dropped, and count nowhere
+ */
+export function createBlockCounter(
+  states: LimitStates,
+  space: JointSpace,
+  plan: SamplingPlan,
+  agrees?: Agreement,
+): BlockCounter {
   const { dimension, capacity, names, keys } = states;
   const z = keys.map(() => new Float64Array(streamBlock));
   const tiles = Array.from({ length: Math.ceil(streamBlock / capacity) }, (_, tile) =>
@@ -73,13 +92,18 @@ export function createBlockCounter(states: LimitStates, space: JointSpace, plan:
   const marks = new Uint8Array(capacity);
   const failed = new Uint8Array(capacity);
   const point = createFailurePoint(space);
+  const keep = new Uint8Array(streamBlock);
   return {
     tally(block) {
-      const samples = Math.min(streamBlock, plan.samples - block * streamBlock);
-      if (!(block >= 0 && samples > 0))
+      const drawn = Math.min(streamBlock, plan.samples - block * streamBlock);
+      if (!(block >= 0 && drawn > 0))
         throw new RangeError(`block ${block} lies outside a run of ${plan.samples} samples`);
-      for (let j = 0; j < dimension; j++) fillNormals(plan.seed, plan.purpose, keys[j], block, z[j], samples);
-      const tally = emptyTally(block, samples, space, plan);
+      for (let j = 0; j < dimension; j++) fillNormals(plan.seed, plan.purpose, keys[j], block, z[j], drawn);
+      const samples = agrees === undefined ? drawn : keepAgreeing(z, drawn, capacity, agrees, keep);
+      const tally = {
+        ...emptyTally(block, samples, drawn, space, plan),
+        ...(agrees === undefined ? {} : { believed: believedPicture(z, samples, space, point) }),
+      };
       for (let tile = 0; tile * capacity < samples; tile++) {
         const n = Math.min(capacity, samples - tile * capacity);
         states.evaluate(tiles[tile], n, factors, marks, false);
@@ -93,6 +117,45 @@ export function createBlockCounter(states: LimitStates, space: JointSpace, plan:
       return tally;
     },
   };
+}
+
+/**
+ * Moves the samples that agree with what has been seen to the front of the columns.
+ *
+ * @returns how many there are
+ */
+export function keepAgreeing(
+  z: Columns,
+  drawn: number,
+  capacity: number,
+  agrees: Agreement,
+  keep: Uint8Array,
+  moved: readonly Float64Array[] = z as readonly Float64Array[],
+): number {
+  for (let start = 0; start < drawn; start += capacity) {
+    const n = Math.min(capacity, drawn - start);
+    agrees(
+      z.map((column) => column.subarray(start, start + n)),
+      n,
+      keep.subarray(start, start + n),
+    );
+  }
+  let kept = 0;
+  for (let i = 0; i < drawn; i++) {
+    if (keep[i] === 0) continue;
+    for (const column of moved) column[kept] = column[i];
+    kept++;
+  }
+  return kept;
+}
+
+function believedPicture(z: Columns, samples: number, space: JointSpace, point: FailurePoint): PictureTally {
+  const picture = emptyPicture(space);
+  for (let i = 0; i < Math.min(samples, picturesPerBlock); i++) {
+    point.lookAt(z, i);
+    addToPicture(picture, point);
+  }
+  return picture;
 }
 
 function countMarks(marks: Uint8Array, n: number, tally: BlockTally): void {
@@ -194,7 +257,7 @@ interface FailurePoint {
   lookAt(z: Columns, i: number): void;
 }
 
-function createFailurePoint({ unknowns, rows }: JointSpace): FailurePoint {
+function createFailurePoint({ unknowns, rows, offsets }: JointSpace): FailurePoint {
   const off = new Float64Array(unknowns.length);
   const bin = new Int32Array(unknowns.length);
   const quantiles = unknowns.map(({ marginal }) => standInOf(marginal));
@@ -204,7 +267,7 @@ function createFailurePoint({ unknowns, rows }: JointSpace): FailurePoint {
     lookAt(z, i) {
       for (let v = 0; v < unknowns.length; v++) {
         const row = rows[v];
-        let u = 0;
+        let u = offsets?.[v] ?? 0;
         for (let j = 0; j < row.length; j++) if (row[j] !== 0) u += row[j] * z[j][i];
         off[v] = quantiles[v](u) - unknowns[v].marginal.mean;
         bin[v] = Math.min(Math.max(Math.floor((u - pictureEdges[0]) * 4), 0), pictureBins - 1);
@@ -222,7 +285,16 @@ function addToPicture(picture: PictureTally, { off, bin }: FailurePoint): void {
   }
 }
 
-function emptyTally(block: number, samples: number, space: JointSpace, plan: SamplingPlan): BlockTally {
+function emptyPicture(space: JointSpace): PictureTally {
+  return {
+    failures: 0,
+    sums: space.unknowns.map(() => 0),
+    squares: space.unknowns.map(() => 0),
+    bins: space.unknowns.map(() => new Array<number>(pictureBins).fill(0)),
+  };
+}
+
+function emptyTally(block: number, samples: number, drawn: number, space: JointSpace, plan: SamplingPlan): BlockTally {
   const state = (bins: number): StateTally => ({
     failures: 0,
     stableFailures: 0,
@@ -232,16 +304,12 @@ function emptyTally(block: number, samples: number, space: JointSpace, plan: Sam
     histogram: new Array<number>(bins).fill(0),
     below: 0,
     above: 0,
-    picture: {
-      failures: 0,
-      sums: space.unknowns.map(() => 0),
-      squares: space.unknowns.map(() => 0),
-      bins: space.unknowns.map(() => new Array<number>(pictureBins).fill(0)),
-    },
+    picture: emptyPicture(space),
   });
   return {
     block,
     samples,
+    drawn,
     stable: 0,
     marks: { slopeUnstable: 0, lostContact: 0, capped: 0, outOfRange: 0 },
     states: plan.edges.map((edges) => state(edges.length - 1)),

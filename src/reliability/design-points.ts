@@ -44,8 +44,15 @@ const startsPerState = 5;
  *
  * One start is not enough: on a wall whose drains work or are blocked, the search from the origin converges to a point that is
  * not the nearest.
+ *
+ * @param known points of limit states much like these, to start from as well
  */
-export function findDesignPoints(states: LimitStates, space: JointSpace, seed: string): DesignPointSearch {
+export function findDesignPoints(
+  states: LimitStates,
+  space: JointSpace,
+  seed: string,
+  known: readonly DesignPoint[] = [],
+): DesignPointSearch {
   const evaluator = pointEvaluator(states);
   const segments = segmentsOf(space, middleOf);
   const before = evaluationsOf(states);
@@ -60,7 +67,12 @@ export function findDesignPoints(states: LimitStates, space: JointSpace, seed: s
       : (points) => evaluator.margins(place, points);
     const starts = originFails
       ? [origin]
-      : [origin, ...segments.otherMiddles, ...startsFrom(exploration, margins, place, startsPerState)];
+      : [
+          origin,
+          ...segments.otherMiddles,
+          ...startsFrom(exploration, margins, place, startsPerState),
+          ...known.filter(({ state }) => state === place).map(({ point }) => point),
+        ];
     const found = searchAll(margins, segments, starts);
     const points = found.map(({ point, status, gradient }) => ({
       state: place,

@@ -41,11 +41,15 @@ export interface StateTotals {
 }
 
 export interface MonteCarloRun {
+  /** Samples that count, and all that were drawn: more where there is evidence that some do not agree with. */
   readonly samples: number;
+  readonly drawn: number;
   readonly stable: number;
   readonly marks: BlockTally["marks"];
   readonly states: readonly StateTotals[];
   readonly system: StateTotals;
+  /** What is believed with the evidence, failing or not; empty without evidence. */
+  readonly believed: StateTotals["picture"];
   /** false when it was stopped from outside; what is here equals a run of `samples` samples. */
   readonly complete: boolean;
 }
@@ -82,7 +86,7 @@ export async function monteCarlo(
       break;
     }
     mergeInto(run, tally);
-    options.onProgress?.(run.samples, plan.samples);
+    options.onProgress?.(run.drawn, plan.samples);
     if (worthShowing(block + 1) || block + 1 === blocks) notePoint(run);
     if (block + 1 !== nextLook) continue;
     nextLook *= 2;
@@ -121,16 +125,20 @@ function emptyRun(plan: SamplingPlan): MutableRun {
   });
   return {
     samples: 0,
+    drawn: 0,
     stable: 0,
     marks: { slopeUnstable: 0, lostContact: 0, capped: 0, outOfRange: 0 },
     states: plan.edges.map((edges) => state(edges.length - 1)),
     system: state(0),
+    believed: { failures: 0, sums: [], squares: [], bins: [] },
     complete: true,
   };
 }
 
 function mergeInto(run: MutableRun, tally: BlockTally): void {
   run.samples += tally.samples;
+  run.drawn += tally.drawn;
+  if (tally.believed !== undefined) mergePicture(run.believed, tally.believed);
   run.stable += tally.stable;
   run.marks.slopeUnstable += tally.marks.slopeUnstable;
   run.marks.lostContact += tally.marks.lostContact;
@@ -172,6 +180,7 @@ function mergePicture(into: StateTotals["picture"], from: PictureTally): void {
 
 function notePoint(run: MutableRun): void {
   for (const state of [...run.states, run.system]) {
+    if (run.samples === 0) continue;
     const interval = clopperPearson(state.failures, run.samples);
     state.convergence.push({ samples: run.samples, probability: state.failures / run.samples, interval });
   }
@@ -180,12 +189,13 @@ function notePoint(run: MutableRun): void {
 /** Estimate, standard error and 95 % Clopper–Pearson interval of one limit state (or the system, without `centre`). */
 export function monteCarloResult(run: MonteCarloRun, state: StateTotals, centre?: number): MonteCarloResult {
   const { samples } = run;
-  const probability = state.failures / samples;
+  // where no sample agrees with the evidence nothing is known
+  const probability = samples === 0 ? 0 : state.failures / samples;
   const moments = centre === undefined ? { mean: null, sd: null } : momentsAbout(state, centre);
   return {
     probability,
-    standardError: Math.sqrt((probability * (1 - probability)) / samples),
-    interval: clopperPearson(state.failures, samples),
+    standardError: samples === 0 ? 0 : Math.sqrt((probability * (1 - probability)) / samples),
+    interval: samples === 0 ? [0, 1] : clopperPearson(state.failures, samples),
     failures: state.failures,
     samples,
     reliabilityIndex: state.failures === 0 || state.failures === samples ? null : normalUpperQuantile(probability),

@@ -1,6 +1,7 @@
 import { clopperPearson } from "../numeric/clopper-pearson.ts";
 import type { JointSpace } from "../probability/marginal.ts";
 import { fillNormals } from "../probability/streams.ts";
+import { type Agreement, keepAgreeing } from "./block-tally.ts";
 import type { LimitStates } from "./limit-states.ts";
 import { spread } from "./monte-carlo.ts";
 
@@ -11,6 +12,8 @@ export interface PeriodPlan {
   readonly evaluations: number;
   /** Coefficient of variation at which sampling stops; 0 uses all evaluations. */
   readonly precision: number;
+  /** Where there is evidence: periods that do not agree with it are dropped. Hangs on nothing yearly. */
+  readonly agrees?: Agreement;
   readonly signal?: AbortSignal;
   readonly onProgress?: (done: number, of: number) => void;
 }
@@ -23,6 +26,8 @@ export interface PeriodResult {
   /** 95 % Clopper–Pearson, on whole periods. */
   readonly interval: readonly [number, number];
   readonly periods: number;
+  /** The same with those that did not agree with the evidence. */
+  readonly drawn: number;
   readonly failures: number;
   /** Periods whose first failure falls in each year, from the first on. */
   readonly firstFailures: readonly number[];
@@ -50,33 +55,35 @@ export async function periodProbability(
 ): Promise<PeriodResult> {
   const most = Math.max(1, Math.floor(plan.evaluations / plan.years));
   const firstFailures = new Array<number>(plan.years).fill(0);
-  let [periods, failures, evaluations, block, nextLook] = [0, 0, 0, 0, 1];
+  let [drawn, periods, failures, evaluations, block, nextLook] = [0, 0, 0, 0, 0, 1];
   let complete = true;
   const counter = createPeriodCounter(states, space, plan, firstFailures);
-  while (periods < most) {
+  while (drawn < most) {
     await new Promise((resolve) => setTimeout(resolve, 0));
     if (plan.signal?.aborted && block > 0) {
       complete = false;
       break;
     }
-    const count = Math.min(periodBlock, most - periods);
+    const count = Math.min(periodBlock, most - drawn);
     const found = counter(block, count);
-    periods += count;
+    drawn += count;
+    periods += found.periods;
     failures += found.failures;
     evaluations += found.evaluations;
     block++;
-    plan.onProgress?.(periods * plan.years, most * plan.years);
+    plan.onProgress?.(drawn * plan.years, most * plan.years);
     if (block !== nextLook) continue;
     nextLook *= 2;
     if (plan.precision > 0 && spread(failures, periods) <= plan.precision) break;
   }
-  const probability = failures / periods;
+  const probability = periods === 0 ? 0 : failures / periods;
   return {
     years: plan.years,
     probability,
-    standardError: Math.sqrt((probability * (1 - probability)) / periods),
-    interval: clopperPearson(failures, periods),
+    standardError: periods === 0 ? 0 : Math.sqrt((probability * (1 - probability)) / periods),
+    interval: periods === 0 ? [0, 1] : clopperPearson(failures, periods),
     periods,
+    drawn,
     failures,
     firstFailures,
     evaluations,
@@ -90,7 +97,7 @@ function createPeriodCounter(
   space: JointSpace,
   plan: PeriodPlan,
   firstFailures: number[],
-): (block: number, count: number) => { failures: number; evaluations: number } {
+): (block: number, count: number) => { failures: number; evaluations: number; periods: number } {
   const { capacity, names } = states;
   const z = space.coordinates.map(() => new Float64Array(periodBlock));
   const tiles = Array.from({ length: Math.ceil(periodBlock / capacity) }, (_, tile) =>
@@ -104,9 +111,12 @@ function createPeriodCounter(
       if (coordinate.yearly === yearly) fillNormals(plan.seed, purpose, coordinate.key, block, z[j], count);
     });
   };
-  return (block, count) => {
+  const lasting = space.coordinates.flatMap((coordinate, j) => (coordinate.yearly ? [] : [z[j]]));
+  const keep = new Uint8Array(periodBlock);
+  return (block, drawn) => {
     failed.fill(0);
-    draw(false, "period", block, count);
+    draw(false, "period", block, drawn);
+    const count = plan.agrees === undefined ? drawn : keepAgreeing(z, drawn, capacity, plan.agrees, keep, lasting);
     let [failures, evaluations] = [0, 0];
     for (let year = 0; year < plan.years && failures < count; year++) {
       draw(true, `period, year ${year}`, block, count);
@@ -121,7 +131,7 @@ function createPeriodCounter(
         failures += fresh;
       }
     }
-    return { failures, evaluations };
+    return { failures, evaluations, periods: count };
   };
 }
 

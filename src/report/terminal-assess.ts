@@ -15,6 +15,7 @@ import {
 import { sparkline } from "./sparkline.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
+import { beforeAndAfter, evidenceText } from "./terminal-evidence.ts";
 import { measuresOfState, measuresOfSystem } from "./terminal-measures.ts";
 import {
   againstTarget,
@@ -34,6 +35,15 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
   const blocks = [
     [...title(result.study, options), ...answer(result, options)],
     [probabilityTable(result, options)],
+    ...(result.evidence === undefined
+      ? []
+      : [
+          [
+            heading("What has been seen", options),
+            evidenceText(result.evidence, result.system.period !== undefined, display, options.width),
+            ...paragraphLines([beforeAndAfter], options),
+          ],
+        ]),
     [heading("What drives it", options), ...driversText(result, options)],
     ...(options.all
       ? [
@@ -249,12 +259,17 @@ function noteOf(variable: VariableSummary, display: Display): readonly string[] 
 
 function howComputed(result: AssessResult, options: TerminalOptions): readonly string[] {
   const { run, system } = result;
+  const kept = system.period?.periods ?? system.monteCarlo.samples;
+  const agreeing =
+    result.evidence === undefined
+      ? ""
+      : ` The ${grouped(kept)} ${system.period === undefined ? "samples" : "periods"} that agree with what has been seen count.`;
   const seconds = run.sampling.seconds > 0 ? ` in ${threeFigures(run.sampling.seconds)} s` : "";
   const stop = run.complete ? "" : " Stopped by the user before the end.";
   return [
     heading("How it was computed", options),
     ...wrap(
-      `Plain Monte Carlo sampling, ${grouped(run.sampling.evaluations)} samples${seconds}, seed “${result.seed}”, 95 % Clopper–Pearson intervals.${stop} The probability of any of the limit states lies between ${probabilityText(system.bounds[0])} and ${probabilityText(system.bounds[1])}, whatever their dependence. toehold ${run.version}.`,
+      `Plain Monte Carlo sampling, ${grouped(run.sampling.evaluations)} samples${seconds}, seed “${result.seed}”, 95 % Clopper–Pearson intervals.${agreeing}${stop} The probability of any of the limit states lies between ${probabilityText(system.bounds[0])} and ${probabilityText(system.bounds[1])}, whatever their dependence. toehold ${run.version}.`,
       options.width,
       "  ",
     ),

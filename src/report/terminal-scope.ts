@@ -4,6 +4,7 @@ import { type Display, displayIn } from "./display.ts";
 import { grouped, indexText, oneIn, probabilityText, significant } from "./number.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, type TerminalOptions } from "./terminal.ts";
+import { evidenceText } from "./terminal-evidence.ts";
 
 /** `toehold scope` for reading: what is best today, what each investigation is worth, and what hangs on the figures given. */
 export function terminalScope(result: ScopeResult, study: Study, options: TerminalOptions): string {
@@ -15,7 +16,9 @@ export function terminalScope(result: ScopeResult, study: Study, options: Termin
     `${heading("Options", options)}\n${optionTable(result, options)}`,
     ...(result.evidence === undefined
       ? []
-      : [`${heading("Evidence", options)}\n${evidenceText(result, display, options)}`]),
+      : [
+          `${heading("Evidence", options)}\n${evidenceText(result.evidence, result.years !== undefined, display, options.width)}`,
+        ]),
     `${heading("What investigations are worth", options)}\n${investigationText(result, display, options)}`,
     `${heading("What could be learned at most", options)}\n${perfectText(result, options)}`,
     ...(result.twoStage === undefined
@@ -208,41 +211,6 @@ function perfectText(result: ScopeResult, { width }: TerminalOptions): string {
   );
   const sentence = `Knowing all of them would be worth ${money(result.perfectInformation, result.currency)}: no investigation can be worth more, none of one variable more than its line. The lines do not add up.`;
   return `${table}\n${wrap(sentence, width, "  ").join("\n")}`;
-}
-
-function evidenceText(result: ScopeResult, display: Display, { width }: TerminalOptions): string {
-  const { evidence } = result;
-  if (evidence === undefined) return "";
-  const rows = evidence.variables.map((one) => [
-    one.label,
-    display.unit(one.unit),
-    display.number(one.prior.mean, one.unit),
-    display.number(one.prior.sd, one.unit),
-    display.number(one.posterior.mean, one.unit),
-    display.number(one.posterior.sd, one.unit),
-  ]);
-  const table = textTable(
-    [
-      { heading: "Variable" },
-      { heading: "Unit", spare: 1 },
-      { heading: "Mean before", align: "right" },
-      { heading: "sd", align: "right" },
-      { heading: "Mean after", align: "right" },
-      { heading: "sd", align: "right" },
-    ],
-    rows,
-    width,
-  );
-  const sentences = [
-    `What has been seen moves the probability of failure in one year from ${oneIn(evidence.priorProbability)} to ${oneIn(evidence.probability)}.`,
-    ...(evidence.chanceOfEvidence === null
-      ? []
-      : [
-          `Under the beliefs before, the chance of having stood all that was survived was ${probabilityText(evidence.chanceOfEvidence)}.`,
-        ]),
-    ...evidence.conflicts.map((conflict) => `Conflict: ${conflict.message}`),
-  ];
-  return `${table}\n${sentences.flatMap((sentence) => wrap(sentence, width, "  ")).join("\n")}`;
 }
 
 function twoStageText(result: ScopeResult, display: Display): string[] {

@@ -12,7 +12,7 @@ export interface NotAvailable {
   readonly value?: string;
 }
 
-export const notAvailable: readonly NotAvailable[] = [{ path: "evidence" }];
+export const notAvailable: readonly NotAvailable[] = [];
 
 /** A problem for each key or value of the tree that is on the list. */
 export function refuseNotAvailable(tree: unknown, list: readonly NotAvailable[], findings: Findings): void {

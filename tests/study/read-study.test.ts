@@ -210,7 +210,7 @@ describe("a changed study", () => {
     expect(problemsOf(() => studyWith(study, { "wall.base.heel": Number.NaN }))).toBe(
       "wall.base.heel: NaN is not a finite number",
     );
-    expect(problemsOf(() => studyWith(study, { evidence: [] }))).toContain("not available in this version");
+    expect(problemsOf(() => studyWith(study, { evidence: "none" }))).toContain("evidence");
   });
 
   test("leaves evidence and correlations aside that its change has made pointless", () => {
@@ -225,12 +225,14 @@ describe("a changed study", () => {
   });
 });
 
-describe("what this version does not serve", () => {
+describe("what a version does not serve", () => {
   test("is answered by name, not as a typing error", () => {
-    const said = problemsOf(() => readStudy(everything, { file: "e.yaml" }));
-    expect(said.split("\n").filter((line) => line.includes("is not available in this version")).length).toBeGreaterThan(
-      0,
-    );
+    const said = problemsOf(() => readStudy(everything, { file: "e.yaml", notAvailable: [{ path: "evidence" }] }));
+    expect(said).toContain("evidence is not available in this version");
     expect(said).not.toContain("unknown key");
+  });
+
+  test("is nothing of the format in this one", () => {
+    expect(readStudy(everything, { file: "e.yaml" }).evidence.length).toBeGreaterThan(0);
   });
 });
