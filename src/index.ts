@@ -13,7 +13,9 @@
 
 export { type AssessOptions, assess, cautiousPoint } from "./assess.ts";
 export { type CheckOptions, check, type GivenValues } from "./check.ts";
+export { design } from "./design.ts";
 export { type Problem, StudyError } from "./errors.ts";
+export { type PartialFactors, readPartialFactors } from "./mechanics/partial-factors.ts";
 export type { BlockTally, PictureTally, SamplingPlan, StateTally } from "./reliability/block-tally.ts";
 export type { BlockRunner } from "./reliability/monte-carlo.ts";
 export type { SamplingMethod } from "./reliability/sampling-estimate.ts";
@@ -26,6 +28,7 @@ export { terminalScope } from "./report/terminal-scope.ts";
 export { terminalSize } from "./report/terminal-size.ts";
 export type * from "./results.ts";
 export type * from "./results-decision.ts";
+export type * from "./results-design.ts";
 export type * from "./results-methods.ts";
 export type * from "./results-size.ts";
 export { type ScopeOptions, scope } from "./scope.ts";

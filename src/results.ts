@@ -4,6 +4,7 @@
  */
 
 import type { EvidenceResult } from "./results-decision.ts";
+import type { DesignResult } from "./results-design.ts";
 import type { AllDrivers, FragilityCurve, HandMethods, SystemFromDesignPoints } from "./results-methods.ts";
 import type { LimitStateName, Notice, Study } from "./study/study.ts";
 
@@ -31,6 +32,8 @@ export interface CheckResult extends ResultBase {
   readonly marks: readonly string[];
   /** The wall as it stands at these values, for drawing. */
   readonly section: Section;
+  /** With partial factors, where they were given. */
+  readonly design?: DesignResult;
 }
 
 export interface Force {
@@ -340,6 +343,8 @@ export interface AssessResult extends ResultBase {
   readonly bestEstimate: BestEstimate;
   /** Where the study has evidence; samples then follow what is believed after it, everything else what was believed before. */
   readonly evidence?: EvidenceResult;
+  /** At the means with partial factors, where they were given. */
+  readonly design?: DesignResult;
   readonly target?: {
     readonly probability: number;
     readonly reliabilityIndex: number;

@@ -8,6 +8,7 @@ import { answerSection } from "./sections/answer.ts";
 import { calculationSection } from "./sections/calculation.ts";
 import { cautionsSection, colophon, notesSection } from "./sections/closing.ts";
 import { computedSection } from "./sections/computed.ts";
+import { designSection } from "./sections/design.ts";
 import { driversSection } from "./sections/drivers.ts";
 import { inputsSection } from "./sections/inputs.ts";
 import { trustSection } from "./sections/trust.ts";
@@ -27,6 +28,7 @@ const sections: readonly SectionMaker[] = [
   driversSection,
   computedSection,
   calculationSection,
+  designSection,
   inputsSection,
   trustSection,
   notesSection,

@@ -15,6 +15,7 @@ import {
 import { sparkline } from "./sparkline.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
+import { type Beside, designText } from "./terminal-design.ts";
 import { beforeAndAfter, evidenceText } from "./terminal-evidence.ts";
 import { measuresOfState, measuresOfSystem } from "./terminal-measures.ts";
 import {
@@ -44,6 +45,7 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
             ...paragraphLines([beforeAndAfter], options),
           ],
         ]),
+    ...(result.design === undefined ? [] : [designText(result.design, besideDesign(result), display, options)]),
     [heading("What drives it", options), ...driversText(result, options)],
     ...(options.all
       ? [
@@ -60,6 +62,19 @@ export function terminalAssess(result: AssessResult, study: Study, options: Term
     [closing(result.warnings, result.cautions, options)],
   ];
   return terminalSafe(`${blocks.map((block) => block.join("\n")).join("\n\n")}\n`);
+}
+
+/** Plain factors at the means and probabilities of failure, to stand beside the check with partial factors. */
+function besideDesign({ limitStates }: AssessResult): Readonly<Record<string, Beside>> {
+  return Object.fromEntries(
+    Object.entries(limitStates).map(([name, { factorAtMean, monteCarlo }]) => [
+      name,
+      {
+        factorOfSafety: factorAtMean,
+        probability: monteCarlo.failures === 0 ? "none seen" : probabilityText(monteCarlo.probability),
+      },
+    ]),
+  );
 }
 
 /** A sentence for the wall and one for each limit state, against the target where there is one. */

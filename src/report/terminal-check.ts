@@ -5,6 +5,7 @@ import { significant, threeFigures } from "./number.ts";
 import { sheetBlocks } from "./sheet-blocks.ts";
 import { textTable, wrap } from "./table.ts";
 import { closing, heading, leastWidth, paragraphLines, type TerminalOptions, terminalSafe, title } from "./terminal.ts";
+import { designText } from "./terminal-design.ts";
 import { orList } from "./wording.ts";
 
 /** `toehold check` for reading: factors of safety, base, forces, the calculation, notes, cautions. */
@@ -15,6 +16,7 @@ export function terminalCheck(result: CheckResult, study: Study, options: Termin
     [...title(result.study, options), ...paragraphLines([valuesSentence(result)], options)],
     [factorTable(result, display, options)],
     paragraphLines(verdicts(result), options),
+    ...(result.design === undefined ? [] : [designText(result.design, result.limitStates, display, options)]),
     [heading(`Forces per ${run} run, about the tip of the toe`, options), forceTable(result, display, options)],
     [heading("Base", options), ...paragraphLines(baseSentences(result, display), options)],
     [heading("Calculation", options) + sheetText(result.sheet, display, options)],

@@ -1,5 +1,6 @@
 import type { Command } from "commander";
 import type { AssessResult } from "../../results.ts";
+import { addFactorsOption, type FactorOptions, factorsFrom } from "../factors.ts";
 import type { Io } from "../io.ts";
 import { startProgress } from "../progress.ts";
 import {
@@ -8,10 +9,11 @@ import {
   type SamplingOptions,
   type StudyInput,
   StudyTextError,
+  withText,
 } from "../study-input.ts";
 import { addJobOptions, type Job, type JobOptions, runJob } from "../study-job.ts";
 
-interface Options extends SamplingOptions, JobOptions {
+interface Options extends SamplingOptions, JobOptions, FactorOptions {
   readonly all?: boolean;
 }
 
@@ -21,10 +23,11 @@ Examples:
   toehold assess wall.yaml --samples 10000000 --precision 0.02
   toehold assess wall.yaml --json > result.json
   toehold assess wall.yaml --compare wider-base.yaml
+  toehold assess wall.yaml --factors factors.yaml
   toehold assess wall.yaml --watch`;
 
 export function addAssess(program: Command, io: Io, end: (code: number) => void): void {
-  addJobOptions(addSamplingOptions(program.command("assess")))
+  addFactorsOption(addJobOptions(addSamplingOptions(program.command("assess"))))
     .argument("<study>", "study file, or - for standard input")
     .description("How likely is each failure, how sure are we, which unknown drives it?")
     .option("--all", "show every method and measure")
@@ -34,10 +37,16 @@ export function addAssess(program: Command, io: Io, end: (code: number) => void)
 
 function assessJob(options: Options, io: Io): Job<AssessResult> {
   return {
-    beside: [],
+    beside: options.factors === undefined ? [] : [options.factors],
     async compute(file, set) {
       const input = await loadStudy(file, set, io);
-      return { study: input.study, result: await runAssess(input, options, io) };
+      const { study, text } = input;
+      const withFactors = await factorsFrom(options.factors, io);
+      const result = await runAssess(input, options, io);
+      if (options.factors === undefined) return { study, result };
+      const { check } = await import("../../check.ts");
+      const { design } = withText(text, () => withFactors(study, check(study)), study.file);
+      return { study, result: { ...result, ...(design === undefined ? {} : { design }) } };
     },
     async text({ study, result }, colour) {
       const { terminalAssess } = await import("../../report/terminal-assess.ts");

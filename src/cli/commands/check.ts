@@ -3,12 +3,13 @@ import type { CheckOptions } from "../../check.ts";
 import type { CheckResult } from "../../results.ts";
 import { limitStateNames } from "../../study/defaults.ts";
 import type { LimitStateName, Study } from "../../study/study.ts";
+import { addFactorsOption, type FactorOptions, factorsFrom } from "../factors.ts";
 import { readInput } from "../files.ts";
 import { type Io, UsageError } from "../io.ts";
 import { addCommonOptions, loadStudy, withText } from "../study-input.ts";
 import { addJobOptions, type Job, type JobOptions, runJob } from "../study-job.ts";
 
-interface Options extends JobOptions {
+interface Options extends JobOptions, FactorOptions {
   readonly at: string;
 }
 
@@ -18,10 +19,11 @@ Examples:
   toehold check wall.yaml --at cautious
   toehold check wall.yaml --set water.behind.level=2.5 --json
   toehold check wall.yaml --set wall.base.heel=3.4 --compare wall.yaml
+  toehold check wall.yaml --at cautious --factors factors.yaml
   toehold check wall.yaml --watch`;
 
 export function addCheck(program: Command, io: Io, end: (code: number) => void): void {
-  addJobOptions(addCommonOptions(program.command("check")))
+  addFactorsOption(addJobOptions(addCommonOptions(program.command("check"))))
     .argument("<study>", "study file, or - for standard input")
     .description("Does the wall stand at one set of values? Forces, factors of safety, the whole calculation.")
     .option(
@@ -30,17 +32,18 @@ export function addCheck(program: Command, io: Io, end: (code: number) => void):
       "mean",
     )
     .addHelpText("after", examples)
-    .action((file: string, options: Options) => runJob(checkJob(options.at, io), file, options, io, end));
+    .action((file: string, options: Options) => runJob(checkJob(options, io), file, options, io, end));
 }
 
-function checkJob(at: string, io: Io): Job<CheckResult> {
+function checkJob({ at, factors }: Options, io: Io): Job<CheckResult> {
   return {
-    beside: isFile(at) ? [at] : [],
+    beside: [...(isFile(at) ? [at] : []), ...(factors === undefined ? [] : [factors])],
     async compute(file, set) {
       const { study, text } = await loadStudy(file, set, io);
       const { check } = await import("../../check.ts");
       const point = await pointOf(study, at, text, io);
-      return { study, result: withText(text, () => check(study, { at: point }), study.file) };
+      const withFactors = await factorsFrom(factors, io);
+      return { study, result: withText(text, () => withFactors(study, check(study, { at: point })), study.file) };
     },
     async text({ study, result }, colour) {
       const { terminalCheck } = await import("../../report/terminal-check.ts");

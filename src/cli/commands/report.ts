@@ -2,6 +2,7 @@ import type { Command } from "commander";
 import type { AssessResult } from "../../results.ts";
 import type { Study } from "../../study/study.ts";
 import { deliver } from "../deliver.ts";
+import { addFactorsOption, type FactorOptions, factorsFrom } from "../factors.ts";
 import { refuseBadTarget, writeOutput } from "../files.ts";
 import { exitCode, type Io, UsageError } from "../io.ts";
 import { addSamplingOptions, loadStudy, type SamplingOptions, withText } from "../study-input.ts";
@@ -13,18 +14,20 @@ Examples:
   toehold report wall.yaml -o - > wall.html`;
 
 export function addReport(program: Command, io: Io, end: (code: number) => void): void {
-  addSamplingOptions(program.command("report"))
+  addFactorsOption(addSamplingOptions(program.command("report")))
     .argument("<study>", "study file, or - for standard input")
     .description("All of it on one page that works offline and prints (report.html where -o names no other file).")
     .addHelpText("after", examples)
-    .action(async (file: string, options: SamplingOptions) => {
+    .action(async (file: string, options: SamplingOptions & FactorOptions) => {
       const target = options.output ?? "report.html";
       if (target === "-" && options.json) throw new UsageError("-o - and --json both want standard output");
-      await refuseBadTarget(target, [file]);
+      const inputs = [file, ...(options.factors === undefined ? [] : [options.factors])];
+      await refuseBadTarget(target, inputs);
       const input = await loadStudy(file, options.set ?? [], io);
       const { check } = await import("../../check.ts");
       const { htmlReport } = await import("../../report/html-report.ts");
-      const checked = withText(input.text, () => check(input.study), input.study.file);
+      const withFactors = await factorsFrom(options.factors, io);
+      const checked = withText(input.text, () => withFactors(input.study, check(input.study)), input.study.file);
       const assessed = await runAssess(input, { ...options, all: true }, io);
       const { failurePoint } = await import("../../report/failure-point.ts");
       const point = failurePoint(assessed);
@@ -36,7 +39,7 @@ export function addReport(program: Command, io: Io, end: (code: number) => void)
       });
       if (target === "-") io.out(page);
       else {
-        await writeOutput(target, page, [file]);
+        await writeOutput(target, page, inputs);
         await summary(assessed, input.study, target, options, io);
       }
       if (!assessed.run.complete) end(exitCode.stopped);
