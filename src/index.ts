@@ -15,6 +15,7 @@ export { type AssessOptions, assess, cautiousPoint } from "./assess.ts";
 export { type CheckOptions, check, type GivenValues } from "./check.ts";
 export { design } from "./design.ts";
 export { type Problem, StudyError } from "./errors.ts";
+export type { DesignCheck, DesignLimitState } from "./mechanics/design-check.ts";
 export { type PartialFactors, readPartialFactors } from "./mechanics/partial-factors.ts";
 export type { BlockTally, PictureTally, SamplingPlan, StateTally } from "./reliability/block-tally.ts";
 export type { BlockRunner } from "./reliability/monte-carlo.ts";

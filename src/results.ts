@@ -6,6 +6,7 @@
 import type { EvidenceResult } from "./results-decision.ts";
 import type { DesignResult } from "./results-design.ts";
 import type { AllDrivers, FragilityCurve, HandMethods, SystemFromDesignPoints } from "./results-methods.ts";
+import type { SizeResult } from "./results-size.ts";
 import type { LimitStateName, Notice, Study } from "./study/study.ts";
 
 export interface ResultBase {
@@ -370,4 +371,6 @@ export interface ReportInput {
   readonly assess: AssessResult;
   /** The wall at the values of `failurePoint(assess)`, for drawing; left out, the page gives the values alone. */
   readonly atFailure?: CheckResult;
+  /** What another dimension would bring, where one was varied. */
+  readonly size?: SizeResult;
 }

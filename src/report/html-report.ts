@@ -11,6 +11,7 @@ import { computedSection } from "./sections/computed.ts";
 import { designSection } from "./sections/design.ts";
 import { driversSection } from "./sections/drivers.ts";
 import { inputsSection } from "./sections/inputs.ts";
+import { sizeSection } from "./sections/size.ts";
 import { trustSection } from "./sections/trust.ts";
 import { wallSection } from "./sections/wall.ts";
 import { pageStyle } from "./style.ts";
@@ -26,6 +27,7 @@ const sections: readonly SectionMaker[] = [
   answerSection,
   wallSection,
   driversSection,
+  sizeSection,
   computedSection,
   calculationSection,
   designSection,

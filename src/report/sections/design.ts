@@ -26,14 +26,14 @@ export function designSection({ check, assess, study }: ReportInput): PageSectio
         { heading: "Probability of failure", numeric: true },
       ],
       states.map(([name, state]) => {
-        const likely = assess.limitStates[name as keyof typeof assess.limitStates]?.monteCarlo.probability;
+        const counted = assess.limitStates[name as keyof typeof assess.limitStates]?.monteCarlo;
         return [
           limitStateName(name),
           significant(check.limitStates[name as keyof typeof check.limitStates]?.factorOfSafety ?? Number.NaN, 3),
           significant(state.ratio, 3),
           display.quantity(state.resisting, state.unit),
           display.quantity(state.driving, state.unit),
-          likely === undefined ? "–" : probabilityText(likely),
+          counted === undefined ? "–" : counted.failures === 0 ? "none seen" : probabilityText(counted.probability),
         ];
       }),
       { states: states.map(([name]) => name) },

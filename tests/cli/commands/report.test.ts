@@ -47,6 +47,16 @@ describe("toehold report", () => {
     expect(JSON.parse(ran.out)).toMatchObject({ kind: "assess" });
   });
 
+  test("--vary adds what another dimension would bring; half an order of it is refused before anything is computed", async () => {
+    const vary = ["--vary", "wall.base.heel", "--from", "1", "--to", "2", "--points", "3"];
+    const ran = await runWith(["report", "-", "-o", "-", ...vary, ...few], { input: small });
+    expect(ran.out).toContain('<section id="size"');
+    expect(ran.out).toContain("Another heel length");
+    const half = await runWith(["report", "-", "-o", "-", ...vary.slice(0, 4)], { input: small });
+    expect(half).toMatchObject({ code: 2, out: "" });
+    expect(half.err).toContain("each --vary needs its --from and its --to");
+  });
+
   test("never writes over the study", async () => {
     const study = join(folder, "own.yaml");
     const text = await readFile(yard, "utf8");
