@@ -122,10 +122,14 @@ function fromPoints(
   };
 }
 
-/** Of the strongest unknown of each limit state. */
+/** Asked about on every wall, whether or not it is the strongest. */
+const waterLevel = "water.behind.level";
+
+/** Of the strongest unknown of each limit state, and of the water behind where its level is uncertain. */
 function fragilityOf(model: Model, paths: readonly (string | undefined)[], seed: string): readonly FragilityCurve[] {
   const { states, space } = model;
-  const strongest = [...new Set(paths)].filter((path): path is string => path !== undefined);
+  const asked = space.unknowns.flatMap(({ path }) => (path === waterLevel ? [path] : []));
+  const strongest = [...new Set([...asked, ...paths])].filter((path): path is string => path !== undefined);
   return strongest.map((path) => {
     const place = space.unknowns.findIndex((unknown) => unknown.path === path);
     return { path, points: fragilityCurve(states, space, place, { ...curve, seed, event: "system" }) };

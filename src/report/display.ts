@@ -67,3 +67,6 @@ export const limitStateName = (name: string): string =>
   name === "eccentricity" ? "Eccentricity" : capitalised(limitStateWords[name] ?? name);
 
 export const capitalised = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+
+/** The same within a sentence: "friction angle of Medium sand". */
+export const uncapitalised = (text: string): string => text.charAt(0).toLowerCase() + text.slice(1);

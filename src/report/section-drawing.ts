@@ -4,6 +4,7 @@ import { dimensions } from "./drawing/dimensions.ts";
 import { type Canvas, type Frame, frameOf } from "./drawing/frame.ts";
 import { ground, groundClips } from "./drawing/ground.ts";
 import { loadRoom, loads } from "./drawing/loads.ts";
+import { type MeansBeside, meansBeside } from "./drawing/means-beside.ts";
 import { pressureDiagram } from "./drawing/pressure-diagram.ts";
 import { soilColumn, soilLabels } from "./drawing/soil-labels.ts";
 import { soilLook } from "./drawing/soils.ts";
@@ -22,6 +23,8 @@ export interface SectionExtras {
   readonly water?: WaterRanges;
   /** Drawn beside the section where it is given. */
   readonly pressure?: readonly PressurePoint[];
+  /** The wall at its means, in broken lines, where this is a failure. */
+  readonly means?: MeansBeside;
 }
 
 /** All drawings have this width, pixels; the height follows from the wall. */
@@ -34,7 +37,7 @@ const pressureWidth = 222;
  * @returns one SVG element in the light colours; everything from the study is escaped
  */
 export function sectionDrawing(section: Section, display: Display, extras: SectionExtras): string {
-  const { id, title, pressure, water = {} } = extras;
+  const { id, title, pressure, water = {}, means } = extras;
   const right = pressure === undefined ? 0 : pressureWidth;
   const canvas: Canvas = {
     width: drawingWidth - soilColumn - right - 8,
@@ -53,24 +56,26 @@ export function sectionDrawing(section: Section, display: Display, extras: Secti
     planeLine(section, frame),
     circleArc(section, frame),
     loads(section, frame, display),
+    means === undefined ? "" : meansBeside(section, frame, display, means),
     waterMarks(section, frame, water, display),
     soilLabels(section, frame, look, display),
     dimensions(section, frame, display),
     pressure === undefined
       ? ""
-      : pressureDiagram(section, frame, display, pressure, [drawingWidth - right, drawingWidth]),
-    legend(section, frame, display, water),
+      : pressureDiagram(section, frame, display, pressure, [drawingWidth - right, drawingWidth], means?.pressure),
+    legend(section, frame, display, extras),
   ];
   const size = `viewBox="0 0 ${drawingWidth} ${fixed(height)}" width="${drawingWidth}" height="${fixed(height)}"`;
   return `<svg xmlns="http://www.w3.org/2000/svg" class="drawing" ${size} role="img" aria-labelledby="${id}-title ${id}-words" font-family="system-ui, 'Segoe UI', Roboto, 'Helvetica Neue', Arial, sans-serif" font-size="12"><title id="${id}-title">${escapeHtml(title)}</title><desc id="${id}-words">${escapeHtml(sectionWords(section, display, extras))}</desc><defs>${look.defs}${groundClips(section, frame, id)}</defs>${parts.join("")}</svg>`;
 }
 
 /** What the signs mean, under the drawing. */
-function legend(s: Section, f: Frame, display: Display, ranges: WaterRanges): string {
+function legend(s: Section, f: Frame, display: Display, { water: ranges = {}, means }: SectionExtras): string {
   const words = [
     `Lengths and levels in ${display.unit("m")}`,
     ...(ranges.behind === undefined && ranges.front === undefined ? [] : ["blue band: water level, 5 to 95 %"]),
-    ...(s.plane === "virtual_back" ? ["broken line: virtual back"] : []),
+    ...(s.plane === "virtual_back" ? [`${means === undefined ? "" : "upright "}broken line: virtual back`] : []),
+    ...(means === undefined ? [] : ["other broken lines: the wall at its means"]),
   ];
   return text(f.x(f.left), f.height + 16, words.join(" · "), `font-size="11" fill="${palette.muted}"`);
 }

@@ -21,6 +21,7 @@ import { measuresOfState, measuresOfSystem } from "./terminal-measures.ts";
 import {
   againstTarget,
   countedEstimate,
+  designPointWords,
   type Estimate,
   estimateSentence,
   noneSeen,
@@ -180,14 +181,14 @@ function methodSentences(state: LimitStateAssessment): readonly string[] {
       : `mean ${significant(mc.factorMean, 3)}, standard deviation ${significant(mc.factorSd, 3)} over the samples`;
   return [
     `Factor of safety: ${significant(state.factorAtMean, 3)} at the means; ${spread}.`,
-    `Sampling: ${both(mc.reliabilityIndex, mc.probability)}.`,
+    `Sampling: ${mc.failures === 0 ? "no failure seen" : both(mc.reliabilityIndex, mc.probability)}.`,
     `First-order second-moment: standard deviation ${significant(moment.sd, 3)}; ${both(moment.reliabilityIndexNormal, moment.probabilityNormal)} if the factor were normal, ${both(moment.reliabilityIndexLognormal, moment.probabilityLognormal)} if lognormal.`,
     ...(first === undefined
       ? []
       : [
           first.status === "none"
-            ? "First-order reliability: no design point was found; nothing within reach fails."
-            : `First-order reliability: ${both(first.reliabilityIndex, first.probability)}, ${first.converged ? first.status : "not converged"}.`,
+            ? `First-order reliability: ${designPointWords(first)}.`
+            : `First-order reliability: ${both(first.reliabilityIndex, first.probability)}; ${designPointWords(first)}.`,
         ]),
     ...(second === undefined
       ? []

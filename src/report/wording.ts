@@ -1,5 +1,5 @@
 /** Sentences that the page and the terminal share, so that both say the same of the same number. */
-import type { AssessResult, MonteCarloResult } from "../results.ts";
+import type { AssessResult, FirstOrderResult, MonteCarloResult } from "../results.ts";
 import { betweenText, grouped, indexText, oneIn, significant } from "./number.ts";
 
 /** A probability as it is known: by counting failures, or by a method that weighs its samples. */
@@ -118,4 +118,21 @@ export const yearsText = (years: number): string => `${Number(years.toPrecision(
 export function orList(words: readonly string[], link = "or"): string {
   if (words.length < 2) return words.join("");
   return `${words.slice(0, -1).join(", ")} ${link} ${words[words.length - 1]}`;
+}
+
+/** How the search for a design point ended, in words, with the points farther out where there are some. */
+export function designPointWords({ status, others = [] }: Pick<FirstOrderResult, "status" | "others">): string {
+  const further = others.map(({ reliabilityIndex }) => indexText(reliabilityIndex));
+  const more =
+    further.length === 0 ? "" : `; ${further.length === 1 ? "another" : "others"} at index ${orList(further, "and")}`;
+  switch (status) {
+    case "smooth":
+      return `design point found${more}`;
+    case "corner":
+      return `design point found, at a kink of the limit state${more}`;
+    case "usable":
+      return `the search did not settle: the point fails, but a nearer one may exist${more}`;
+    default:
+      return "no design point: nothing within reach fails";
+  }
 }

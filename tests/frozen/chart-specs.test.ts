@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { convergenceChart } from "../../src/report/charts/convergence.ts";
 import { factorHistogram } from "../../src/report/charts/factor-histogram.ts";
 import { failurePictureChart } from "../../src/report/charts/failure-picture-chart.ts";
+import { fragilityChart } from "../../src/report/charts/fragility.ts";
 import { probabilityChart } from "../../src/report/charts/probabilities.ts";
 import { sharesChart } from "../../src/report/charts/shares.ts";
 import { tornadoChart } from "../../src/report/charts/tornado-chart.ts";
@@ -18,6 +19,19 @@ const charts = [
   tornadoChart(assess, "sliding", sliding, display),
   factorHistogram("sliding", sliding),
   failurePictureChart(assess, assess.system.failurePicture, display)!,
+  fragilityChart(
+    assess,
+    {
+      path: "water.behind.level",
+      points: [
+        { value: 0, probability: 0, standardError: 0, interval: [0, 1e-3], method: "plain" },
+        { value: 1, probability: 1e-4, standardError: 1e-5, interval: [8e-5, 1.2e-4], method: "importance" },
+        { value: 3, probability: 2e-2, standardError: 1e-3, interval: [1.8e-2, 2.2e-2], method: "plain" },
+      ],
+    },
+    assess.variables.find(({ path }) => path === "water.behind.level")!,
+    display,
+  ),
   convergenceChart(assess.system.convergence),
   yearlyRiskChart({
     years: 4,

@@ -3,7 +3,7 @@ import { assess } from "../../src/assess.ts";
 import { displayIn } from "../../src/report/display.ts";
 import { handRows, probabilityPerSd } from "../../src/report/measures.ts";
 import { probabilityText } from "../../src/report/number.ts";
-import { fragilityTables, fromDesignPoints, handMethodsTable, measuresOf } from "../../src/report/sections/measures.ts";
+import { fragility, fromDesignPoints, handMethodsTable, measuresOf } from "../../src/report/sections/measures.ts";
 import { measuresOfState, measuresOfSystem } from "../../src/report/terminal-measures.ts";
 import type { LimitStateAssessment } from "../../src/results.ts";
 import { readDocument } from "../../src/study/read-study.ts";
@@ -34,8 +34,8 @@ describe("every measure, on terminal and page", async () => {
     expect(text).toContain("Probability of any failure");
   });
 
-  test("the page shows the same, one table for each limit state", () => {
-    const html = `${measuresOf(result)}${handMethodsTable(result)}${fromDesignPoints(result)}${fragilityTables(result, display)}`;
+  test("the page shows the same, one table for each limit state", async () => {
+    const html = `${measuresOf(result)}${handMethodsTable(result)}${fromDesignPoints(result)}${await fragility(result, display)}`;
     expect(html.match(/every measure side by side/g)).toHaveLength(Object.keys(result.limitStates).length);
     expect(html).toContain("Ditlevsen’s bounds");
     expect(html).toContain("If one value were known");
@@ -47,7 +47,7 @@ describe("every measure, on terminal and page", async () => {
     expect(measuresOf(short)).toBe("");
     expect(handMethodsTable(short)).toBe("");
     expect(fromDesignPoints(short)).toBe("");
-    expect(fragilityTables(short, display)).toBe("");
+    expect(await fragility(short, display)).toBe("");
     expect(measuresOfSystem(short, display, options)).toEqual([]);
     expect(handRows(short.limitStates.sliding as LimitStateAssessment)).toEqual([]);
   });

@@ -51,6 +51,18 @@ describe("the section", () => {
     expect(wordsOf(draw({ ...section, circle }))).toContain("critical circle");
   });
 
+  test("beside a failure the wall at its means stands in broken lines, and only where it differs", () => {
+    const broken = (svg: string): number => svg.match(/stroke-dasharray="(7|5) 4"/g)?.length ?? 0;
+    const risen = { ...section, water: { ...section.water, behind: section.water.behind! + 1 } };
+    const failing = draw(risen, { means: { section, pressure } });
+    expect(wordsOf(failing)).toContain("1.70 at the means");
+    expect(wordsOf(failing).some((text) => text.includes("other broken lines: the wall at its means"))).toBe(true);
+    // one water level, and the pressure of earth and of water
+    expect(broken(failing)).toBe(3);
+    expect(broken(draw(section, { means: { section, pressure } }))).toBe(2);
+    expect(broken(draw(section))).toBe(0);
+  });
+
   test("names a load that stands too far away to be drawn", () => {
     const words = wordsOf(draw({ ...section, lines: [{ force: 30, at: 60 }] }));
     expect(words.some((text) => /30\.0 kN\/m, 60\.0 m behind the crest/.test(text))).toBe(true);

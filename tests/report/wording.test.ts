@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import {
   againstTarget,
   allFailed,
+  designPointWords,
   type Estimate,
   estimateSentence,
   multipleText,
@@ -97,4 +98,14 @@ describe("sentences of the page and the terminal", () => {
     expect(orList(["sliding"])).toBe("sliding");
     expect(orList(["sliding", "overturning", "bearing failure"])).toBe("sliding, overturning or bearing failure");
   });
+});
+
+test("the end of a search for a design point reads in plain words", () => {
+  expect(designPointWords({ status: "smooth" })).toBe("design point found");
+  const others = [3.95, 4.2].map((reliabilityIndex) => ({ reliabilityIndex, status: "smooth", designPoint: {} }));
+  expect(designPointWords({ status: "corner", others })).toBe(
+    "design point found, at a kink of the limit state; others at index 3.95 and 4.20",
+  );
+  expect(designPointWords({ status: "usable" })).toContain("did not settle");
+  expect(designPointWords({ status: "none" })).toBe("no design point: nothing within reach fails");
 });

@@ -2,7 +2,7 @@ import type { PressurePoint, Section } from "../../results.ts";
 import type { Display } from "../display.ts";
 import { palette } from "../palette.ts";
 import type { Frame } from "./frame.ts";
-import { label, line, type Point, polygon, text } from "./svg.ts";
+import { label, line, type Point, polygon, polyline, text } from "./svg.ts";
 
 interface Panel {
   readonly title: string;
@@ -18,6 +18,8 @@ const numberRoom = 36;
 /**
  * Pressure on the plane beside the section and on its levels: earth (with strips and lines) and water, one scale for both.
  * Drawn from the points of the calculation: where the soil changes the pressure jumps, and stays a jump.
+ *
+ * @param means pressure at the means, drawn beside it as a broken line on the same scale
  */
 export function pressureDiagram(
   s: Section,
@@ -25,10 +27,12 @@ export function pressureDiagram(
   display: Display,
   points: readonly PressurePoint[],
   [left, right]: readonly [number, number],
+  means: readonly PressurePoint[] = [],
 ): string {
   if (points.length === 0) return "";
-  const wet = points.some((point) => point.water > 0);
-  const loaded = points.some((point) => point.loads > 0);
+  const both = [...points, ...means];
+  const wet = both.some((point) => point.water > 0);
+  const loaded = both.some((point) => point.loads > 0);
   const width = wet ? (right - left - 10) / 2 : right - left;
   const earth: Panel = {
     title: loaded ? "Earth, loads" : "Earth",
@@ -45,10 +49,13 @@ export function pressureDiagram(
     value: (point) => point.water,
   };
   const panels = wet ? [earth, water] : [earth];
-  const largest = Math.max(...points.flatMap((point) => panels.map((panel) => panel.value(point))), 1e-9);
+  const largest = Math.max(...both.flatMap((point) => panels.map((panel) => panel.value(point))), 1e-9);
   const perPressure = (width - numberRoom) / largest;
   return [
-    ...panels.map((panel) => drawPanel(s, f, display, points, panel, perPressure)),
+    ...panels.flatMap((panel) => [
+      drawPanel(s, f, display, points, panel, perPressure),
+      meansLine(f, means, panel, perPressure),
+    ]),
     text(
       left,
       f.y(Math.min(...points.map((point) => point.z))) + 20,
@@ -83,6 +90,12 @@ function drawPanel(
     ...numbers(f, display, points, panel, px),
     text(panel.left, f.y(first.z) - 12, panel.title, 'font-weight="600"'),
   ].join("");
+}
+
+function meansLine(f: Frame, means: readonly PressurePoint[], panel: Panel, perPressure: number): string {
+  if (means.length === 0) return "";
+  const curve = means.map((point): Point => [panel.left + panel.value(point) * perPressure, f.y(point.z)]);
+  return polyline(curve, `stroke="${palette.ink}" stroke-width="1.1" stroke-dasharray="5 4"`);
 }
 
 /** Values at both sides of every break, where there is room: a value above its level and the one after the jump below. */

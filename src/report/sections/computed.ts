@@ -6,6 +6,7 @@ import { factorHistogram } from "../charts/factor-histogram.ts";
 import { limitStateName } from "../display.ts";
 import { htmlTable, type PageSection, paragraph, section } from "../markup.ts";
 import { grouped, indexText, intervalText, oneIn, probabilityText, significant } from "../number.ts";
+import { designPointWords } from "../wording.ts";
 import { fromDesignPoints, handMethodsTable } from "./measures.ts";
 
 /** How the probabilities were computed: samples, histograms, methods side by side, convergence, what was counted. */
@@ -64,16 +65,7 @@ function methodsTable({ limitStates }: AssessResult): string {
     add("First-order second-moment, normal", moment.reliabilityIndexNormal, moment.probabilityNormal, spread);
     add("First-order second-moment, lognormal", moment.reliabilityIndexLognormal, moment.probabilityLognormal, spread);
     if (first !== undefined)
-      add(
-        "First-order reliability",
-        first.reliabilityIndex,
-        first.probability,
-        first.status === "none"
-          ? "no design point found: nothing within reach fails"
-          : first.converged
-            ? `${first.status} design point`
-            : "not converged",
-      );
+      add("First-order reliability", first.reliabilityIndex, first.probability, designPointWords(first));
     if (second !== undefined) add("Second-order reliability", second.reliabilityIndex, second.probability, "");
   }
   return htmlTable(

@@ -6,7 +6,7 @@ import { tornadoChart } from "../charts/tornado-chart.ts";
 import { type Display, limitStateName } from "../display.ts";
 import { type Cell, htmlTable, type PageSection, paragraph, section } from "../markup.ts";
 import { grouped, shareText, shiftText } from "../number.ts";
-import { fragilityTables, measuresOf } from "./measures.ts";
+import { fragility, measuresOf } from "./measures.ts";
 
 /** Which unknown drives the risk: shares, one at a time, and what the failures look like. */
 export async function driversSection({ assess }: ReportInput, display: Display): Promise<PageSection> {
@@ -27,7 +27,7 @@ export async function driversSection({ assess }: ReportInput, display: Display):
     await pictures(assess, display),
     ...(await tornadoes(assess, display)),
     measuresOf(assess),
-    fragilityTables(assess, display),
+    await fragility(assess, display),
   );
 }
 

@@ -1,5 +1,8 @@
-import type { AssessResult } from "../../results.ts";
-import { type Display, limitStateName } from "../display.ts";
+import type { AssessResult, VariableSummary } from "../../results.ts";
+import type { FragilityCurve } from "../../results-methods.ts";
+import { chartFigure } from "../chart-figure.ts";
+import { fragilityChart } from "../charts/fragility.ts";
+import { type Display, limitStateName, uncapitalised } from "../display.ts";
 import { bullets, type Cell, htmlTable, paragraph, subheading } from "../markup.ts";
 import { handRows, probabilityPerSd } from "../measures.ts";
 import { intervalText, oneIn, probabilityText, shareText, shiftText, significant } from "../number.ts";
@@ -104,32 +107,40 @@ export function fromDesignPoints(assess: AssessResult): string {
   );
 }
 
-/** Probability of the system at values of its strongest unknowns. */
-export function fragilityTables(assess: AssessResult, display: Display): string {
-  const tables = (assess.system.fragility ?? []).flatMap(({ path, points }) => {
-    const variable = assess.variables.find((one) => one.path === path);
-    if (variable === undefined) return [];
-    return [
-      htmlTable(
-        [
-          { heading: variable.label },
-          { heading: "Probability of any failure", numeric: true },
-          { heading: "as a number", numeric: true },
-          { heading: "95 % interval", numeric: true },
-        ],
-        points
-          .filter((_, i) => i % 2 === 0)
-          .map(({ value, probability, interval }) => [
-            display.quantity(value, variable.unit),
-            oneIn(probability),
-            probabilityText(probability),
-            intervalText(interval),
-          ]),
-        {
-          caption: `Probability of any failure with ${variable.label.toLowerCase()} at each of these values, from its 0.1 to its 99.9 % fractile.`,
-        },
-      ),
-    ];
-  });
-  return tables.length === 0 ? "" : `${subheading("If one value were known")}${tables.join("")}`;
+/** Probability of the system at values of its strongest unknowns, each as a curve with its numbers below. */
+export async function fragility(assess: AssessResult, display: Display): Promise<string> {
+  const curves = await Promise.all(
+    (assess.system.fragility ?? []).map(async (curve) => {
+      const variable = assess.variables.find(({ path }) => path === curve.path);
+      if (variable === undefined) return "";
+      const chart = await chartFigure(
+        fragilityChart(assess, curve, variable, display),
+        "All other unknowns as believed; the tinted stretch is where this one is likely to lie, from its 5 to its 95 % value. The band about the curve is the 95 % interval of the sampling.",
+      );
+      return chart + fragilityTable(curve, variable, display);
+    }),
+  );
+  return curves.length === 0 ? "" : `${subheading("If one value were known")}${curves.join("")}`;
+}
+
+function fragilityTable({ points }: FragilityCurve, variable: VariableSummary, display: Display): string {
+  return htmlTable(
+    [
+      { heading: variable.label },
+      { heading: "Probability of any failure", numeric: true },
+      { heading: "as a number", numeric: true },
+      { heading: "95 % interval", numeric: true },
+    ],
+    points
+      .filter((_, i) => i % 4 === 0)
+      .map(({ value, probability, interval }) => [
+        display.quantity(value, variable.unit),
+        oneIn(probability),
+        probabilityText(probability),
+        intervalText(interval),
+      ]),
+    {
+      caption: `Some of these values, from the 0.1 to the 99.9 % fractile of ${uncapitalised(variable.label)}.`,
+    },
+  );
 }

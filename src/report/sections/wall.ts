@@ -91,10 +91,11 @@ function likelyFailure(input: ReportInput, display: Display): string {
               id: "at-failure",
               title: `The wall at ${point.name}`,
               pressure: atFailure.pressure,
+              means: input.check,
             }),
           ),
           title: `The wall at ${point.name}`,
-          text: "Drawn with the values of the table below.",
+          text: "Drawn with the values of the table below; levels and pressures at the means stand beside them as broken lines.",
         }) + factorTable(atFailure, display, "At these values");
   const rows = input.assess.variables.flatMap((variable) => {
     const value = point.values[variable.path];
