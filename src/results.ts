@@ -3,7 +3,7 @@
  * (`--json`) the same keys appear in snake_case; keys that are paths (they hold a dot) and limit state names stay as they are.
  */
 
-import type { EvidenceResult } from "./results-decision.ts";
+import type { EvidenceResult, ScopeResult } from "./results-decision.ts";
 import type { DesignResult } from "./results-design.ts";
 import type { AllDrivers, FragilityCurve, HandMethods, SystemFromDesignPoints } from "./results-methods.ts";
 import type { SizeResult } from "./results-size.ts";
@@ -369,6 +369,8 @@ export interface ReportInput {
   readonly study: Study;
   readonly check: CheckResult;
   readonly assess: AssessResult;
+  /** Where the study has a decision. */
+  readonly scope?: ScopeResult;
   /** The wall at the values of `failurePoint(assess)`, for drawing; left out, the page gives the values alone. */
   readonly atFailure?: CheckResult;
   /** What another dimension would bring, where one was varied. */

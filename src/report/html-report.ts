@@ -8,8 +8,10 @@ import { answerSection } from "./sections/answer.ts";
 import { calculationSection } from "./sections/calculation.ts";
 import { cautionsSection, colophon, notesSection } from "./sections/closing.ts";
 import { computedSection } from "./sections/computed.ts";
+import { decisionSection } from "./sections/decision.ts";
 import { designSection } from "./sections/design.ts";
 import { driversSection } from "./sections/drivers.ts";
+import { evidenceSection } from "./sections/evidence.ts";
 import { inputsSection } from "./sections/inputs.ts";
 import { sizeSection } from "./sections/size.ts";
 import { trustSection } from "./sections/trust.ts";
@@ -25,6 +27,8 @@ export type SectionMaker = (
 /** The page from top to bottom: a new section is a file in sections/ and a line here. */
 const sections: readonly SectionMaker[] = [
   answerSection,
+  decisionSection,
+  evidenceSection,
   wallSection,
   driversSection,
   sizeSection,

@@ -8,6 +8,7 @@ import { exitCode, type Io, UsageError } from "../io.ts";
 import { addSamplingOptions, loadStudy, type SamplingOptions, withText } from "../study-input.ts";
 import { addVaryOptions, runSize, type VaryOptions, variedOf } from "../vary.ts";
 import { runAssess } from "./assess.ts";
+import { runScope } from "./scope.ts";
 
 const examples = `
 Examples:
@@ -36,11 +37,14 @@ export function addReport(program: Command, io: Io, end: (code: number) => void)
       const sized = varies ? await runSize(input, options, io) : undefined;
       const { failurePoint } = await import("../../report/failure-point.ts");
       const point = failurePoint(assessed);
+      const decided =
+        input.study.decision === undefined || !assessed.run.complete ? undefined : await runScope(input, options, io);
       const page = await htmlReport({
         study: input.study,
         check: checked,
         assess: assessed,
         ...(sized === undefined ? {} : { size: sized }),
+        ...(decided === undefined ? {} : { scope: decided }),
         ...(point === undefined ? {} : { atFailure: check(input.study, { at: point }) }),
       });
       if (target === "-") io.out(page);

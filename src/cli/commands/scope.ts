@@ -1,9 +1,16 @@
 import type { Command } from "commander";
+import type { ScopeResult } from "../../results-decision.ts";
 import { deliver } from "../deliver.ts";
 import { refuseBadTarget } from "../files.ts";
 import { exitCode, type Io } from "../io.ts";
 import { startProgress } from "../progress.ts";
-import { addSamplingOptions, loadStudy, type SamplingOptions, StudyTextError } from "../study-input.ts";
+import {
+  addSamplingOptions,
+  loadStudy,
+  type SamplingOptions,
+  type StudyInput,
+  StudyTextError,
+} from "../study-input.ts";
 
 const examples = `
 Examples:
@@ -17,20 +24,9 @@ export function addScope(program: Command, io: Io, end: (code: number) => void):
     .addHelpText("after", examples)
     .action(async (file: string, options: SamplingOptions) => {
       await refuseBadTarget(options.output, [file]);
-      const { study, text } = await loadStudy(file, options.set ?? [], io);
-      const { scope } = await import("../../scope.ts");
-      const progress = await startProgress(io, options.quiet === true || options.json === true);
-      const result = await scope(study, {
-        ...(options.seed === undefined ? {} : { seed: options.seed }),
-        ...(options.samples === undefined ? {} : { samples: options.samples }),
-        ...(options.precision === undefined ? {} : { precision: options.precision }),
-        clock: io.clock,
-        onProgress: (done, of) => progress.update(done, of),
-      })
-        .catch((error: unknown) => {
-          throw new StudyTextError(error, text, study.file);
-        })
-        .finally(() => progress.stop());
+      const input = await loadStudy(file, options.set ?? [], io);
+      const { study } = input;
+      const result = await runScope(input, options, io);
       if (options.json) {
         const { resultJson } = await import("../../report/result-json.ts");
         await deliver(resultJson(result), options, [file], io);
@@ -41,4 +37,21 @@ export function addScope(program: Command, io: Io, end: (code: number) => void):
       }
       if (!result.run.complete) end(exitCode.stopped);
     });
+}
+
+/** Weighs a study that is in hand, with progress. */
+export async function runScope({ study, text }: StudyInput, options: SamplingOptions, io: Io): Promise<ScopeResult> {
+  const { scope } = await import("../../scope.ts");
+  const progress = await startProgress(io, options.quiet === true || options.json === true);
+  return scope(study, {
+    ...(options.seed === undefined ? {} : { seed: options.seed }),
+    ...(options.samples === undefined ? {} : { samples: options.samples }),
+    ...(options.precision === undefined ? {} : { precision: options.precision }),
+    clock: io.clock,
+    onProgress: (done, of) => progress.update(done, of),
+  })
+    .catch((error: unknown) => {
+      throw new StudyTextError(error, text, study.file);
+    })
+    .finally(() => progress.stop());
 }

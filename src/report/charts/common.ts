@@ -27,3 +27,6 @@ export function decades(least: number): { readonly floor: number; readonly value
 
 /** Labels of such an axis: the number above, how often below. */
 export const decadeLabels = `[["1", "certain"], ["0.1", "1 in 10"], ["10⁻²", "1 in 100"], ["10⁻³", "1 in 1000"], ["10⁻⁴", "1 in 10 000"], ["10⁻⁵", "1 in 100 000"], ["10⁻⁶", "1 in 10⁶"], ["10⁻⁷", "1 in 10⁷"], ["10⁻⁸", "1 in 10⁸"], ["10⁻⁹", "1 in 10⁹"], ["10⁻¹⁰", "1 in 10¹⁰"], ["10⁻¹¹", "1 in 10¹¹"], ["10⁻¹²", "1 in 10¹²"], ["10⁻¹³", "1 in 10¹³"]][round(-log(datum.value) / LN10)]`;
+
+/** Labels of an axis of money: thousands apart by a thin space, as in the text. */
+export const moneyLabels = "replace(format(datum.value, ',.0f'), regexp(',', 'g'), '\u202f')";
