@@ -41,14 +41,19 @@ export function latinHypercube(states: LimitStates, order: SamplingOrder): Sampl
   };
 }
 
-const order = Uint32Array.from({ length: points }, (_, i) => i);
-const keysOfOrder = new Float64Array(points);
+const order = new Uint32Array(points);
+const uniforms = new Float64Array(points);
 
-/** One normal in each of equally likely parts, in random order. */
+/** One normal in each of equally likely parts, in random order (R. A. Fisher and F. Yates's shuffle). */
 function fillStratified(seed: string, key: string, replicate: number, out: Float64Array): void {
-  fillUniforms(seed, "latin hypercube, order", key, replicate, keysOfOrder, points);
+  fillUniforms(seed, "latin hypercube, order", key, replicate, uniforms, points);
   for (let i = 0; i < points; i++) order[i] = i;
-  order.sort((a, b) => keysOfOrder[a] - keysOfOrder[b]);
-  fillUniforms(seed, "latin hypercube, place", key, replicate, keysOfOrder, points);
-  for (let i = 0; i < points; i++) out[i] = normalQuantile((order[i] + keysOfOrder[i]) / points);
+  for (let i = points - 1; i > 0; i--) {
+    const other = Math.floor(uniforms[i] * (i + 1));
+    const part = order[i];
+    order[i] = order[other];
+    order[other] = part;
+  }
+  fillUniforms(seed, "latin hypercube, place", key, replicate, uniforms, points);
+  for (let i = 0; i < points; i++) out[i] = normalQuantile((order[i] + uniforms[i]) / points);
 }

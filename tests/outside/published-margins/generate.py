@@ -35,3 +35,33 @@ h = lambda u: (18.46154 - 74769.23 * (1000 + 200 * u[0]) / (250 + 37.5 * u[1]) *
 print("cantilever", index(h, 2))
 q = lambda v: stats.norm.pdf(v) * stats.norm.sf((18.46154 * (250 + 37.5 * v) ** 3 / 74769.23 - 1000) / 200)
 print("  probability", integrate.quad(q, -6.6, 10, epsabs=0, epsrel=1e-12, limit=500)[0])
+
+# frame, probability: P(S > R) with R = x1 + 2 x2 + 2 x3 + x4, S = 5 x5 + 5 x6, by convolution of densities on a grid
+step, n = 0.02, 1 << 18
+grid = step * np.arange(n)
+
+
+def cells(factor, mean, sd):
+    z = np.sqrt(np.log1p((sd / mean) ** 2))
+    law = stats.lognorm(z, scale=factor * np.exp(np.log(mean) - z * z / 2))
+    return np.diff(law.cdf(np.append(-step / 2, grid + step / 2)))
+
+
+ft = lambda parts: np.fft.irfft(np.prod([np.fft.rfft(p) for p in parts], axis=0), n)
+resisting = ft([cells(1, 120, 12), cells(2, 120, 12), cells(2, 120, 12), cells(1, 120, 12)])
+driving = ft([cells(5, 50, 15), cells(5, 40, 12)])
+below = np.cumsum(resisting) - resisting / 2
+print("frame, probability", below @ driving)
+
+# oscillator: 3 r - |2 F sin(w t / 2) / (m w^2)|, w^2 = (c1 + c2) / m; F and r given the rest in closed form, the rest by quadrature
+x, w = np.polynomial.hermite_e.hermegauss(120)
+w = w / w.sum()
+c = (1.1 + np.hypot(0.1, 0.01) * x)[:, None, None]
+m = (1 + 0.05 * x)[None, :, None]
+t = (1 + 0.2 * x)[None, None, :]
+k = np.where((c > 0) & (m > 0), 2 * np.abs(np.sin(np.sqrt(np.abs(c / m)) * t / 2)) / np.abs(c), 0)
+weights = w[:, None, None] * w[None, :, None] * w[None, None, :]
+for mean, sd in ((1, 0.2), (0.6, 0.1), (0.45, 0.075)):
+    spread = np.hypot(k * sd, 3 * 0.05)
+    fails = stats.norm.sf((1.5 - k * mean) / spread) + stats.norm.sf((1.5 + k * mean) / spread)
+    print("oscillator", mean, np.sum(weights * fails))
