@@ -24,6 +24,13 @@ export interface AllOrder {
   readonly withEvidence?: boolean;
 }
 
+/** Where circles are searched in every sample, measures rest on fewer samples, and the probability against one value is left out. */
+const dear = { samples: 1024, points: 32 };
+export const dearNote =
+  "deep-seated failure searches circles in every sample: the measures of what drives it rest on fewer samples than those of other walls, and the probability against one known value is left out";
+
+export const isDear = ({ study }: Model): boolean => study.assessment.limitStates.includes("deep_seated");
+
 /** Adds all measures to the limit states and the system of an assessment. */
 export function withAllMeasures(
   model: Model,
@@ -43,6 +50,7 @@ export function withAllMeasures(
     firstOrder: assessed.map((state) => state.firstOrderReliability ?? nothing),
     drivers: assessed.map((state) => state.drivers),
     remadeAt: remadeAt(model),
+    ...(isDear(model) ? dear : {}),
   });
   const hands = handMethods(model, correlation);
   const entries = states.names.map((name, k): [string, LimitStateAssessment] => {
@@ -65,11 +73,13 @@ export function withAllMeasures(
       ...system,
       failurePicture: withEvidence ? system.failurePicture : sharper(system.failurePicture, full.system.failurePicture),
       ...fromPoints(model, search),
-      fragility: fragilityOf(
-        model,
-        full.states.map(({ ranking }) => ranking[0]?.path),
-        seed,
-      ),
+      fragility: isDear(model)
+        ? []
+        : fragilityOf(
+            model,
+            full.states.map(({ ranking }) => ranking[0]?.path),
+            seed,
+          ),
     },
   };
 }

@@ -1,5 +1,5 @@
 /** How likely is each failure, how sure are we, and which unknown drives it? */
-import { withAllMeasures } from "./assess-all.ts";
+import { dearNote, isDear, withAllMeasures } from "./assess-all.ts";
 import { bestEstimateWithEvidence } from "./assess-evidence.ts";
 import { bestEstimateOf, plainEstimate, pointMethods } from "./assess-methods.ts";
 import { cautions } from "./cautions.ts";
@@ -160,6 +160,7 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
       ...study.notices,
       ...mechanicsNotes(study, kernel, columns),
       ...assessmentNotes(study, result),
+      ...(options.all === true && isDear(model) ? [{ path: "assessment.limit_states", message: dearNote }] : []),
       ...(seen === undefined ? [] : evidenceNotes(study, seen)),
     ],
   };

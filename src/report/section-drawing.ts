@@ -75,6 +75,7 @@ function legend(s: Section, f: Frame, display: Display, { water: ranges = {}, me
     `Lengths and levels in ${display.unit("m")}`,
     ...(ranges.behind === undefined && ranges.front === undefined ? [] : ["blue band: water level, 5 to 95 %"]),
     ...(s.plane === "virtual_back" ? [`${means === undefined ? "" : "upright "}broken line: virtual back`] : []),
+    ...(s.circle === undefined ? [] : ["dash-dotted arc: critical circle"]),
     ...(means === undefined ? [] : ["other broken lines: the wall at its means"]),
   ];
   return text(f.x(f.left), f.height + 16, words.join(" · "), `font-size="11" fill="${palette.muted}"`);

@@ -42,6 +42,5 @@ export function circleArc(s: Section, f: Frame): string {
   const [x2, y2] = f.at([entryX, low(entryX)]);
   const r = fixed(radius * f.scale);
   const large = entryX - exitX > 1.99 * radius ? 1 : 0;
-  const [wx, wy] = f.at([x, z - radius]);
-  return `<path d="M${fixed(x1)} ${fixed(y1)}A${r} ${r} 0 ${large} 0 ${fixed(x2)} ${fixed(y2)}" fill="none" stroke="${palette.fail}" stroke-width="2" stroke-dasharray="9 4 2 4"/>${label(wx, wy - 6, "critical circle", `fill="${palette.fail}" text-anchor="middle"`)}`;
+  return `<path d="M${fixed(x1)} ${fixed(y1)}A${r} ${r} 0 ${large} 0 ${fixed(x2)} ${fixed(y2)}" fill="none" stroke="${palette.fail}" stroke-width="2" stroke-dasharray="9 4 2 4"/>`;
 }
