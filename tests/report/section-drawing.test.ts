@@ -48,7 +48,9 @@ describe("the section", () => {
 
   test("draws the critical circle where there is one", () => {
     const circle = { x: 1, z: 6, radius: 7, entryX: 7.8, exitX: -2.5 };
-    expect(wordsOf(draw({ ...section, circle }))).toContain("critical circle");
+    const drawn = draw({ ...section, circle });
+    expect(wordsOf(drawn).join(" ")).toContain("dash-dotted arc: critical circle");
+    expect(drawn).toContain('stroke-dasharray="9 4 2 4"');
   });
 
   test("beside a failure the wall at its means stands in broken lines, and only where it differs", () => {

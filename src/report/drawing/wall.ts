@@ -1,7 +1,7 @@
 import type { Section } from "../../results.ts";
 import { palette } from "../palette.ts";
 import type { Frame } from "./frame.ts";
-import { fixed, label, line, type Point, polygon } from "./svg.ts";
+import { fixed, line, type Point, polygon } from "./svg.ts";
 
 /** Stem, base slab and key in one outline. */
 export function wall(s: Section, f: Frame): string {
