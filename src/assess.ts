@@ -89,6 +89,7 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
     ...(options.signal === undefined ? {} : { signal: options.signal }),
   }).finally(() => runner.close?.());
   const period = await periodOf(study, sampled, seed, options, run.complete);
+  const seconds = (options.clock?.() ?? 0) - start;
   const goOn = run.complete && (period?.complete ?? true) && options.signal?.aborted !== true;
   const search = goOn ? findDesignPoints(states, space, seed) : undefined;
   const seen = evidence(study, { seed });
@@ -130,7 +131,6 @@ export async function assess(study: Study, options: AssessOptions = {}): Promise
             system,
             order,
           );
-  const seconds = (options.clock?.() ?? 0) - start;
   const variables = variableSummaries(study, unknownsOf(study, kernel), space);
   const columns = columnsAtMeans(model);
   const { target } = study.assessment;

@@ -1,6 +1,7 @@
 import type { LimitStateAssessment } from "../results.ts";
-import type { HandMethod } from "../results-methods.ts";
-import { indexText, probabilityText, significant } from "./number.ts";
+import type { HandMethod, RankedUnknown } from "../results-methods.ts";
+import { uncapitalised } from "./display.ts";
+import { indexText, leastProbability, probabilityText, significant } from "./number.ts";
 
 /**
  * Hand methods as rows: name, mean and sd of the factor, both indices, and how far the better of their two probabilities lies from the
@@ -54,6 +55,32 @@ export function probabilityPerSd(
 ): string {
   if (derivative === undefined || derivative.value === null || sd === undefined) return "–";
   const { value, standardError } = derivative;
-  if (value === 0 || Math.abs(value) < 2 * (standardError ?? 0)) return "0";
+  if (Math.abs(value) * sd < leastProbability || Math.abs(value) < 2 * (standardError ?? 0)) return "0";
   return `${value < 0 ? "−" : "+"}${probabilityText(Math.abs(value) * sd)}`;
 }
+
+/** So many rows or more that say next to nothing are named in one line instead. */
+const fewestFolded = 4;
+/** Parts of a whole that read "below 0.1 %", shifts that read 0.1 at most, correlations that are noise. */
+const small = { part: 1e-3, shift: 0.15, correlation: 0.1 };
+
+/** Rows of a long table that are worth their line, and the rest. */
+export function foldRows<T>(
+  rows: readonly T[],
+  saysNothing: (row: T) => boolean,
+): { readonly shown: readonly T[]; readonly folded: readonly T[] } {
+  const folded = rows.filter(saysNothing);
+  return folded.length < fewestFolded
+    ? { shown: rows, folded: [] }
+    : { shown: rows.filter((row) => !saysNothing(row)), folded };
+}
+
+/** Whether a driver is next to nothing by every measure that was taken of it. */
+export const nextToNothing = (row: Partial<RankedUnknown>): boolean =>
+  [row.share, row.importance, row.totalIndex].every((part) => Math.abs(part ?? 0) < small.part) &&
+  Math.abs(row.shiftGivenFailure ?? 0) < small.shift &&
+  Math.abs(row.rankCorrelation ?? 0) < small.correlation;
+
+/** "Next to nothing: toe length, base thickness." */
+export const foldedSentence = (labels: readonly string[]): readonly string[] =>
+  labels.length === 0 ? [] : [`Next to nothing by every measure here: ${labels.map(uncapitalised).join(", ")}.`];

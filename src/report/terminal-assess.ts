@@ -2,6 +2,7 @@ import type { AssessResult, Driver, LimitStateAssessment, VariableSummary } from
 import type { Study } from "../study/study.ts";
 import { bestEstimateSentences } from "./best-estimate-text.ts";
 import { type Display, displayIn, limitStateName, limitStateWords } from "./display.ts";
+import { foldedSentence, foldRows, nextToNothing } from "./measures.ts";
 import {
   grouped,
   indexText,
@@ -199,7 +200,8 @@ function methodSentences(state: LimitStateAssessment): readonly string[] {
 function driverTable(state: LimitStateAssessment, result: AssessResult, { width }: TerminalOptions): string {
   const label = labelsOf(result);
   const bars = new Map(state.tornado.map((bar) => [bar.path, bar]));
-  const rows = state.drivers.map((driver) => [
+  const { shown, folded } = foldRows(state.drivers, nextToNothing);
+  const rows = shown.map((driver) => [
     label(driver.path),
     driver.share === null ? "–" : shareText(driver.share),
     driver.shiftGivenFailure === null ? "–" : shiftText(driver.shiftGivenFailure),
@@ -207,7 +209,7 @@ function driverTable(state: LimitStateAssessment, result: AssessResult, { width 
     significant(bars.get(driver.path)?.factorAt5 ?? Number.NaN, 3),
     significant(bars.get(driver.path)?.factorAt95 ?? Number.NaN, 3),
   ]);
-  return textTable(
+  const table = textTable(
     [
       { heading: "Variable" },
       { heading: "Share", align: "right" },
@@ -219,6 +221,8 @@ function driverTable(state: LimitStateAssessment, result: AssessResult, { width 
     rows,
     width,
   );
+  const rest = foldedSentence(folded.map(({ path }) => label(path))).flatMap((line) => wrap(line, width, "  "));
+  return [table, ...rest].join("\n");
 }
 
 /** Every uncertain value: moments, fractiles, what part is knowledge, and its density as a row of blocks. */

@@ -1,6 +1,6 @@
 import type { AssessResult, LimitStateAssessment } from "../results.ts";
 import { type Display, limitStateName } from "./display.ts";
-import { handRows, probabilityPerSd } from "./measures.ts";
+import { foldedSentence, foldRows, handRows, nextToNothing, probabilityPerSd } from "./measures.ts";
 import { probabilityText, shareText, shiftText, significant } from "./number.ts";
 import { textTable, wrap } from "./table.ts";
 import { heading, paragraphLines, type TerminalOptions } from "./terminal.ts";
@@ -40,7 +40,8 @@ function rankingOf(state: LimitStateAssessment, result: AssessResult, width: num
   const sds = new Map(result.variables.map(({ path, sd }) => [path, sd]));
   const derivatives = new Map(drivers.derivatives.map((row) => [row.path, row]));
   const share = (value: number | null | undefined): string => (value == null ? "–" : shareText(value));
-  const rows = drivers.ranking.map((row) => [
+  const { shown, folded } = foldRows(drivers.ranking, nextToNothing);
+  const rows = shown.map((row) => [
     `${row.rank}. ${labels.get(row.path) ?? row.path}`,
     share(row.importance),
     share(row.firstIndex),
@@ -74,6 +75,7 @@ function rankingOf(state: LimitStateAssessment, result: AssessResult, width: num
   return [
     "",
     table,
+    ...foldedSentence(folded.map(({ path }) => labels.get(path) ?? path)).flatMap((line) => wrap(line, width, "  ")),
     ...remarks.flatMap((remark) => wrap(remark, width, "  ")),
     ...wrap(`Indices (Sobol’) are of ${of}.${correlated}`, width, "  "),
   ];

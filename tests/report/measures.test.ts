@@ -1,7 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { assess } from "../../src/assess.ts";
 import { displayIn } from "../../src/report/display.ts";
-import { handRows, probabilityPerSd } from "../../src/report/measures.ts";
+import { foldedSentence, foldRows, handRows, nextToNothing, probabilityPerSd } from "../../src/report/measures.ts";
 import { probabilityText } from "../../src/report/number.ts";
 import { fragility, fromDesignPoints, handMethodsTable, measuresOf } from "../../src/report/sections/measures.ts";
 import { measuresOfState, measuresOfSystem } from "../../src/report/terminal-measures.ts";
@@ -57,4 +57,16 @@ test("a change of probability that is not clear of its error reads 0", () => {
   expect(probabilityPerSd({ value: -2e-3, standardError: 1e-4 }, 2)).toBe(`−${probabilityText(4e-3)}`);
   expect(probabilityPerSd({ value: 1e-4, standardError: 1e-4 }, 2)).toBe("0");
   expect(probabilityPerSd({ value: null, standardError: null }, 2)).toBe("–");
+});
+
+test("rows that say next to nothing are named in one line where there are many, and keep theirs where there are few", () => {
+  const rows = [0.4, 1e-4, 2e-4, 0, 5e-4].map((share, i) => ({ path: `x${i}`, share, shiftGivenFailure: null }));
+  expect(foldRows(rows, nextToNothing).shown.map(({ path }) => path)).toEqual(["x0"]);
+  expect(foldRows(rows.slice(0, 4), nextToNothing).folded).toEqual([]);
+  expect(nextToNothing({ share: 1e-4, shiftGivenFailure: -0.3 })).toBe(false);
+  expect(nextToNothing({ importance: 0, totalIndex: 0, rankCorrelation: 0.3 })).toBe(false);
+  expect(foldedSentence(["Toe length", "Base thickness"])).toEqual([
+    "Next to nothing by every measure here: toe length, base thickness.",
+  ]);
+  expect(foldedSentence([])).toEqual([]);
 });
