@@ -1,5 +1,9 @@
-import { expect, test } from "vitest";
+import { describe, expect, test } from "vitest";
+import { assess } from "../src/assess.ts";
+import { decisionModel } from "../src/decision-model.ts";
 import { evidence } from "../src/evidence.ts";
+import { prepareWall } from "../src/mechanics/prepare-wall.ts";
+import { spaceOf } from "../src/model.ts";
 import { resultTree } from "../src/report/result-json.ts";
 import { scope } from "../src/scope.ts";
 import { readStudy } from "../src/study/read-study.ts";
@@ -96,4 +100,81 @@ evidence:
   expect(found.probability).toBeLessThan(found.priorProbability);
   expect(found.conflicts).toEqual([]);
   expect(evidence(read(wall))).toBeUndefined();
+});
+
+describe("knowledge and nature in unequal shares", () => {
+  const shares = (level: string, period: string) =>
+    read(`
+title: Shares (invented)
+wall:
+  stem: { height: 5.0, crest_width: 0.30, foot_width: 0.55 }
+  base: { toe: 0.9, heel: 2.4, thickness: 0.55 }
+  unit_weight: 24.5
+  sliding_friction: { ratio: 0.82 }
+soils:
+  fill:
+    unit_weight: 19.5
+    friction_angle:
+      normal: { mean: 36 }
+      scatter: { inherent: 0.06, scale_of_fluctuation: 2, averaged_over: 4, measurement: 0.03 }
+  sand: { unit_weight: 18.2, friction_angle: { measured: [33.1, 35.4, 31.8, 36.0, 34.2] } }
+ground: { behind: { layers: [ { soil: fill, bottom: 2.6 }, { soil: sand } ] }, below: { soil: sand } }
+water: { behind: { level: { gumbel: { mean: 1.5, sd: 0.5 }${level} } } }
+correlations:
+  - { between: [soils.fill.friction_angle, soils.sand.friction_angle], coefficient: 0.5 }
+  - { between: [water.behind.level, soils.sand.friction_angle], coefficient: -0.1 }
+assessment: { limit_states: [sliding, overturning, bearing], seed: shares${period} }
+decision: { currency: EUR, failure_cost: 1000000, options: [ { name: As drawn, cost: 0 } ] }
+`);
+
+  test.each([
+    ["the ground as it is", "", ""],
+    ["a period of one year", ", yearly: true, knowledge: 0.3", ", period: 1"],
+  ])("assess and the base option of scope agree, and correlation is kept: %s", async (_, level, period) => {
+    const study = shares(level, period);
+    const assessed = await assess(study, { samples: 65_536, precision: 0, method: "plain" });
+    const { options } = await scope(study, { samples: 16_384 });
+    const { probability, standardError } = assessed.bestEstimate;
+    // each fails 1 in 15 000
+    const allowed = 4 * Math.hypot(standardError, options[0].probabilityStandardError);
+    expect(Math.abs(options[0].probability - probability)).toBeLessThan(allowed);
+    expect(allowed).toBeLessThan(0.2 * probability);
+    const { monteCarlo } = assessed.system;
+    expect(Math.abs(monteCarlo.probability - probability)).toBeLessThan(
+      4 * Math.hypot(standardError, monteCarlo.standardError),
+    );
+    const kappas = assessed.variables.map(({ knowledge }) => knowledge);
+    expect(new Set(kappas).size).toBe(3);
+    // the split moves nothing: the same study with the shares left out of account
+    const whole = decisionModel(study).problem.variables;
+    const [fill, sand] = ["soils.fill.friction_angle", "soils.sand.friction_angle"].map(
+      (path) => whole.find((one) => one.path === path)!.image.row,
+    );
+    const together = spaceOf(study, prepareWall(study), false);
+    const row = (path: string) => together.rows[together.unknowns.findIndex((one) => one.path === path)];
+    const dot = (a: Float64Array, b: Float64Array) => a.reduce((sum, x, j) => sum + x * b[j], 0);
+    expect(dot(fill, sand)).toBeCloseTo(dot(row("soils.fill.friction_angle"), row("soils.sand.friction_angle")), 10);
+  });
+});
+
+test("where the target must be met, the cheapest option is closed and the choice falls on one that meets it", async () => {
+  const strict = `
+decision:
+  currency: EUR
+  failure_cost: 1000
+  must_meet_target: true
+  options:
+    - { name: As drawn, cost: 0 }
+    - { name: Longer heel, cost: 14000, change: { wall.base.heel: 3.6 }, always_open: true }
+    - { name: Dearer still, cost: 20000, change: { wall.base.heel: 3.8 } }
+`;
+  const result = await scope(read(wall + strict), { samples: 8192 });
+  const [drawn, longer, dearer] = result.options;
+  expect(drawn.meetsTarget).toBe(false);
+  expect(drawn.open).toBe(false);
+  expect(drawn.expectedCost).toBeLessThan(longer.expectedCost);
+  expect(longer.open).toBe(true);
+  expect(dearer.open).toBe(dearer.meetsTarget);
+  expect(result.bestOption).toBe("Longer heel");
+  expect(result.target?.mustMeet).toBe(true);
 });

@@ -62,7 +62,7 @@ export function runDecision(problem: DecisionProblem, search: CentreSearch, sett
   evaluations += beliefs.evaluations;
   const first = decisionBasis(problem, pilot, beliefs);
   const samples = Math.min(
-    Math.max(sizeFor(first, centres, pilot.drawn, settings.precision), 4 * pilotSize),
+    Math.max(sizeFor(first, centres, pilot.drawn, settings.precision), 2 * pilotSize),
     settings.most,
   );
   const basis = decisionBasis(problem, draw(samples, "decision"), beliefs);
@@ -128,6 +128,10 @@ function sizeFor(basis: DecisionBasis, centres: readonly FailureCentre[], drawn:
   const failureCost = outcomes[today].expectedCost.value - problem.options[today].cost;
   const wanted = Math.max(precision * perfect.value, 1e-3 * failureCost);
   if (!(wanted > 0)) return 0;
-  const error = Math.max(perfect.standardError, runnerUp?.difference.standardError ?? 0);
-  return Math.ceil(drawn * (error / wanted) ** 2);
+  const needed = (error: number, allowed: number): number => Math.ceil(drawn * (error / allowed) ** 2);
+  if (runnerUp === undefined) return needed(perfect.standardError, wanted);
+  const { value, standardError } = runnerUp.difference;
+  // a runner-up that is clearly dearer needs no sharper figure
+  const clear = Math.max(0.008 * perfect.value, 0.05 * Math.abs(value), wanted);
+  return Math.max(needed(perfect.standardError, wanted), needed(standardError, clear));
 }

@@ -2,9 +2,11 @@ import { expect, test } from "vitest";
 import { normalMoments } from "../../../src/decision/belief-moments.ts";
 import { conditionOnResults } from "../../../src/decision/condition-on-results.ts";
 import { predictiveScale, updatedMean, updatedMeanAndVariance } from "../../../src/decision/conjugate-normal.ts";
+import { evidence } from "../../../src/evidence.ts";
 import { betaQuantile } from "../../../src/numeric/incomplete-beta.ts";
 import { studentUpperQuantile } from "../../../src/numeric/student-t.ts";
 import { normal } from "../../../src/probability/normal.ts";
+import { readStudy } from "../../../src/study/read-study.ts";
 import { problemOf, variable } from "../../decision/problems.ts";
 import { disagreement, readCases } from "../cases.ts";
 
@@ -18,6 +20,26 @@ test("the conjugate formula gives the posterior of a normal mean with known scat
     expect(disagreement("mean", mean, row.mean)).toBe("");
     expect(disagreement("sd", sd, row.sd)).toBe("");
     expect(disagreement("predictive sd", Math.hypot(sd, scatter), row.predictive_sd, 1e-7)).toBe("");
+  }
+});
+
+test("evidence in a study gives the same posterior", () => {
+  for (const row of rows) {
+    const results = Array.from({ length: Number(row.n) }, () => row.result_mean).join(", ");
+    const study = readStudy(`
+title: Known scatter (invented)
+wall:
+  stem: { height: 4.5, crest_width: 0.3, foot_width: 0.5 }
+  base: { toe: 0.8, heel: 2.4, thickness: 0.5 }
+  unit_weight: 24
+  sliding_friction: { ratio: 0.8 }
+soils: { sand: { unit_weight: 18, friction_angle: { normal: { mean: ${row.prior_mean}, sd: ${row.prior_sd} } } } }
+ground: { behind: { layers: [ { soil: sand } ] }, below: { soil: sand } }
+evidence: [ { results: [${results}], of: soils.sand.friction_angle, error: ${row.scatter} } ]
+`);
+    const [{ posterior }] = evidence(study, { samples: 1024 })!.variables;
+    expect(disagreement("mean", posterior.mean, row.mean)).toBe("");
+    expect(disagreement("sd", posterior.sd, row.sd)).toBe("");
   }
 });
 
