@@ -69,6 +69,48 @@ export function driversCsv({ limitStates, system }: AssessResult): string {
   ]);
 }
 
+/** Probabilities with their intervals: each limit state and the system by plain sampling, then the best estimate. */
+export function probabilitiesCsv({ limitStates, system, bestEstimate, seed }: AssessResult): string {
+  const counted = [...Object.entries(limitStates), ["system", system] as const].map(([name, { monteCarlo }]) => [
+    name,
+    "plain",
+    monteCarlo.probability,
+    monteCarlo.standardError,
+    ...monteCarlo.interval,
+    monteCarlo.reliabilityIndex,
+    monteCarlo.failures,
+    monteCarlo.samples,
+    seed,
+  ]);
+  const { method, probability, standardError, interval, reliabilityIndex, evaluations } = bestEstimate;
+  return csvText([
+    [
+      "limit_state",
+      "method",
+      "probability",
+      "standard_error",
+      "interval_low",
+      "interval_high",
+      "reliability_index",
+      "failures",
+      "evaluations",
+      "seed",
+    ],
+    ...counted,
+    ["best_estimate", method, probability, standardError, ...interval, reliabilityIndex, null, evaluations, seed],
+  ]);
+}
+
+/** One row per sample: values by path, then factors of safety by limit state. */
+export function samplesCsv(table: {
+  readonly paths: readonly string[];
+  readonly limitStates: readonly string[];
+  readonly rows: readonly Float64Array[];
+}): string {
+  const heads = [...table.paths, ...table.limitStates.map((name) => `factor_of_safety.${name}`)];
+  return csvText([heads, ...table.rows.map((row) => [...row])]);
+}
+
 /** RFC 4180: commas, CRLF, quotes doubled. What is missing or not finite is an empty field. */
 export function csvText(rows: readonly (readonly CsvValue[])[]): string {
   return rows.map((row) => `${row.map(field).join(",")}\r\n`).join("");

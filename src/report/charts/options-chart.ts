@@ -12,6 +12,8 @@ const axisRoom = chartWidth - 150;
 /** Words of two options closer than this, in pixels, would run into each other. */
 const tooClose = 20;
 const height = 280;
+/** The target's words stand so far above its line, to their middle. */
+const targetRise = 10;
 
 /** What each option costs to build against how likely the wall then fails; the best today filled. */
 export function optionsChart(result: ScopeResult): Chart {
@@ -36,6 +38,7 @@ export function optionsChart(result: ScopeResult): Chart {
       rowOf(option, result, floor, (option.cost - cheapest + room) / (dearest - cheapest + 2 * room)),
     ),
     floor,
+    target?.probability,
   );
   return {
     id: "options",
@@ -119,10 +122,11 @@ function rowOf(option: ScopeOption, { bestOption, currency }: ScopeResult, floor
   };
 }
 
-/** Words that would lie on each other move apart, upwards. */
-function placed(rows: readonly Row[], floor: number): readonly Row[] {
-  const pixel = ({ probability }: Row): number => (height * Math.log10(probability)) / Math.log10(floor);
-  const used: number[] = [];
+/** Words that would lie on each other, or on those of the target, move apart, upwards. */
+function placed(rows: readonly Row[], floor: number, target: number | undefined): readonly Row[] {
+  const pixel = ({ probability }: Pick<Row, "probability">): number =>
+    (height * Math.log10(probability)) / Math.log10(floor);
+  const used: number[] = target === undefined ? [] : [pixel({ probability: target }) - targetRise];
   return [...rows]
     .sort((a, b) => pixel(b) - pixel(a))
     .map((row) => {
