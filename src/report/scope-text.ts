@@ -97,6 +97,8 @@ export function pairs(result: ScopeResult): string[] {
 export function twoStageText(result: ScopeResult, display: Display): string[] {
   const { twoStage, investigations, currency } = result;
   if (twoStage === undefined) return [];
+  if (twoStage.steps.every(({ investigate }) => investigate === undefined))
+    return [`After “${twoStage.first}” no second investigation is worth its price, whatever the first finds.`];
   const first = investigations.find((one) => one.name === twoStage.first);
   const unit = first?.informs.length === 1 ? first.informs[0].unit : undefined;
   const steps = twoStage.steps.map((step) => {
