@@ -1,43 +1,11 @@
 // The heavy runs are stored (source.md says how to run them anew); a few seeds are run again here and held against them.
-import { readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
+import { bestEstimate } from "../../../src/reliability/best-estimate.ts";
 import { findDesignPoints } from "../../../src/reliability/design-points.ts";
 import type { SamplingEstimate } from "../../../src/reliability/sampling-estimate.ts";
 import { importanceOf, rareOrder } from "./methods.ts";
-import { modelOf, type NamedWall } from "./walls.ts";
-
-interface Known {
-  readonly probability: number;
-  readonly standardError: number;
-}
-interface Spread {
-  readonly median: number;
-  readonly of99in100: number;
-  readonly largest: number;
-}
-interface Rare {
-  readonly cost: readonly {
-    readonly wall: NamedWall;
-    readonly unknowns: number;
-    readonly truth: Known;
-    readonly seeds: number;
-    readonly evaluations: Spread;
-    readonly coefficientOfVariation: Spread;
-    readonly seconds: Spread;
-    readonly farthestInStandardErrors: number;
-    readonly first: readonly (Known & { readonly evaluations: number })[];
-  }[];
-  readonly drains: {
-    readonly wall: NamedWall;
-    readonly seeds: number;
-    readonly withBothPoints: number;
-    readonly first: { readonly least: number; readonly most: number };
-    readonly second: { readonly least: number; readonly most: number };
-    readonly farthestInStandardErrors: number;
-  };
-}
-
-const stored = <T>(name: string): T => JSON.parse(readFileSync(new URL(`${name}.json`, import.meta.url), "utf8")) as T;
+import { type BatteryRow, type Known, type Rare, stored } from "./stored.ts";
+import { modelOf, thirtyWalls } from "./walls.ts";
 
 /** A stored run and the same seed now: half a standard error allows for a sample that a rounding moves across the edge. */
 function expectAsStored(found: Pick<SamplingEstimate, "probability">, before: Known, what: string): void {
@@ -86,6 +54,49 @@ describe("rare failures of a wall with ten unknowns", () => {
       const found = findDesignPoints(states, space, `drains ${seed}`).states[bearing].points;
       expect(found[0].reliabilityIndex).toBeCloseTo(drains.first.least, 3);
       expect(found[1].reliabilityIndex).toBeCloseTo(drains.second.least, 3);
+    }
+  });
+});
+
+describe("the best estimate on thirty walls", () => {
+  const battery = stored<readonly BatteryRow[]>("battery");
+  const apart = (a: Known, b: Known): number =>
+    Math.abs(a.probability - b.probability) / Math.hypot(a.standardError, b.standardError);
+  const binomial = ({ samples, failures }: NonNullable<BatteryRow["counted"]>): Known => ({
+    probability: failures / samples,
+    standardError: Math.sqrt(failures) / samples,
+  });
+
+  test("what is held for true is confirmed by a method that knows no design points", () => {
+    expect(battery.map(({ wall }) => wall)).toEqual(thirtyWalls);
+    for (const { wall, sharp, counted, subset } of battery) {
+      const other = counted === undefined ? subset! : binomial(counted);
+      expect(counted === undefined).toBe(sharp.probability < 1e-4);
+      // one in 16 000 for each wall
+      expect(apart(other, sharp), `${wall.kind} ${wall.heel}`).toBeLessThan(4);
+      expect(other.standardError / other.probability).toBeLessThan(0.12);
+    }
+  });
+
+  test("it is within its stated error on all of them, and its cross-check agrees", () => {
+    for (const { wall, best, sharp } of battery) {
+      expect(apart(best, sharp), `${wall.kind} ${wall.heel}`).toBeLessThan(4);
+      expect(best.agrees, wall.kind).toBe(true);
+    }
+    const covered = battery.filter(({ best: { interval }, sharp: { probability } }) => {
+      return interval[0] <= probability && probability <= interval[1];
+    });
+    // 95 % of 30; an honest interval covers fewer than 25 once in 300
+    expect(covered.length).toBeGreaterThanOrEqual(25);
+  });
+
+  test("two of them run again give what is stored", () => {
+    for (const place of [4, 19]) {
+      const { wall, best } = battery[place];
+      const { states, space } = modelOf(wall);
+      const found = bestEstimate(states, space, { seed: "battery", precision: 0.05, samples: 1_000_000 });
+      expect(found.method).toBe(best.method);
+      expectAsStored(found, best, wall.kind);
     }
   });
 });
