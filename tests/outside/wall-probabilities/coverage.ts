@@ -6,7 +6,7 @@
  *
  * Works through all walls and methods a hundred seeds at a time and writes the file anew after each hundred; subset simulation and
  * directional sampling, which cost most, run with every third seed. A third argument is the first seed, so that parts can run side by
- * side (coverage-parts.ts adds them up).
+ * side (coverage-parts.ts adds them up); a fourth, 1 or 2, runs the dear methods alone on another third of the seeds.
  */
 import { writeFileSync } from "node:fs";
 import type { SamplingMethod } from "../../../src/reliability/sampling-estimate.ts";
@@ -16,6 +16,8 @@ import { fiveWalls, modelOf } from "./walls.ts";
 const seeds = Number(process.argv[2]);
 const target = process.argv[3];
 const first = Number(process.argv[4] ?? 0);
+/** Of the seeds of dear methods: 0 with all others, 1 or 2 by themselves. */
+const third = Number(process.argv[5] ?? 0);
 const millions = 3;
 /** Runs of these are dear: every third seed alone. */
 const dear: readonly string[] = ["subset", "directional"];
@@ -25,7 +27,8 @@ const rows = fiveWalls.map((wall) => {
   const truth = sharpValue(model, 10);
   const failures = countedFailures(model, millions);
   console.error(wall.kind, truth.probability, truth.standardError, failures);
-  const tallies = Object.keys(methods).map((method) => ({
+  const wanted = Object.keys(methods).filter((method) => third === 0 || dear.includes(method));
+  const tallies = wanted.map((method) => ({
     method: method as SamplingMethod,
     seeds: 0,
     covered: 0,
@@ -43,7 +46,7 @@ for (let from = first; from < seeds; from += 100) {
   for (const { model, truth, tallies } of rows)
     for (const tally of tallies)
       for (let seed = from; seed < Math.min(seeds, from + 100); seed++) {
-        if (dear.includes(tally.method) && seed % 3 !== 0) continue;
+        if (dear.includes(tally.method) && seed % 3 !== third) continue;
         const found = methods[tally.method](model, coverageOrder(seed));
         const [low, high] = found.interval;
         tally.seeds++;
