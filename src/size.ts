@@ -109,6 +109,15 @@ export async function size(study: Study, options: SizeOptions): Promise<SizeResu
       ...(study.assessment.period === undefined
         ? []
         : [{ path: "assessment.period", message: "the curve is of one year, not of the period" }]),
+      ...(study.evidence.length === 0
+        ? []
+        : [
+            {
+              path: "evidence",
+              message:
+                "the curve is of the beliefs before what has been seen: evidence is of the wall as it stands, not of another size, and is not weighed here",
+            },
+          ]),
     ],
     cautions,
     run: { version, seed, workers: 1, complete, sampling: { evaluations, seconds: (options.clock?.() ?? 0) - start } },

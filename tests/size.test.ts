@@ -78,3 +78,17 @@ describe("sizing a dimension", () => {
     await expect(run).rejects.toThrow(words);
   });
 });
+
+test("evidence is of the wall as it stands: a curve over other sizes leaves it out, and says so", async () => {
+  const seen = readDocument({
+    ...tree,
+    evidence: [{ results: [26, 27], of: "wall.sliding_friction.angle", error: 1 }],
+  });
+  const vary = [{ path: "wall.base.heel", from: 2, to: 2.4, points: 2 }] as const;
+  const [plain, noted] = [await size(study, { vary }), await size(seen, { vary })];
+  expect(noted.points.map(({ probability }) => probability)).toEqual(
+    plain.points.map(({ probability }) => probability),
+  );
+  expect(noted.warnings.map(({ path }) => path)).toContain("evidence");
+  expect(plain.warnings.map(({ path }) => path)).not.toContain("evidence");
+});
